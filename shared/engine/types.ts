@@ -1,4 +1,5 @@
 import type {
+  ComparisonValue,
   Condition,
   Departure,
   Edition,
@@ -24,17 +25,28 @@ export interface Finding {
   case?: string;
 }
 
-/** How a condition came out, with what each comparison saw. Same content as json-rules-engine's. */
+/**
+ * How a condition came out, with what each comparison saw: the content of json-rules-engine's rule result,
+ * with the verdicts of groups restored. `holds` is null where a fact without a value left it open;
+ * `actual` is null where the fact has no value. `comparedWith`: what the fact named as `value` was.
+ */
 export type Evidence =
-  | { group: 'all' | 'any' | 'not'; holds: boolean; of: readonly Evidence[] }
-  | { fact: string; operator: Operator; value: Condition | unknown; actual: unknown; holds: boolean };
+  | { group: 'all' | 'any' | 'not'; holds: boolean | null; of: readonly Evidence[] }
+  | {
+      fact: string;
+      operator: Operator;
+      value: ComparisonValue;
+      comparedWith?: number | string | null;
+      actual: number | string | null;
+      holds: boolean | null;
+    };
 
 /** Why this case: the evidence of the cases before it (all false) and its own. */
 export interface Choosing {
   case: string;
   title?: string;
   /** One per tried case in order; the otherwise case has none. */
-  tried: readonly { case: string; holds: boolean; evidence: Evidence }[];
+  tried: readonly { case: string; holds: boolean | null; evidence: Evidence }[];
 }
 
 /** Where an entry's stored value stands: its source and whether a second person verified it. */
