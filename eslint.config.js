@@ -17,6 +17,7 @@ const closedTo = (...rooms) => ({
 });
 
 export default ts.config(
+  { files: ['**/*.cjs'], languageOptions: { globals: globals.node } },
   { ignores: ['dist', 'node_modules', '.cache'] },
   js.configs.recommended,
   ...ts.configs.strict,
