@@ -1,3 +1,4 @@
+import type { CompiledEdition } from '#shared/basis/compile/plan.ts';
 import type {
   ComparisonValue,
   Condition,
@@ -95,8 +96,11 @@ export interface LedgerEntry {
   uses: Readonly<Record<string, number>>;
   standing?: Standing;
   departure?: { stored: number | null; reason: string; approvedBy?: string };
+  /** Why there is no value. */
   refused?: string;
-  /** JSON pointer of the value in the edition (or of the input in the member). */
+  /** Document in which `pointer` stands. */
+  in: 'edition' | 'member';
+  /** JSON pointer of the value's place; empty for what the analysis gives. */
   pointer: string;
 }
 
@@ -239,11 +243,8 @@ export interface FoundSection {
   cost?: number;
 }
 
-/** Compiled edition. Opaque outside the engine. */
-export interface Plan {
-  readonly edition: Edition;
-  readonly hash: string;
-}
+/** Compiled edition. Opaque outside the engine, but for the edition itself and its hash. */
+export type Plan = CompiledEdition;
 
 export type CompileOutcome =
   { ok: true; plan: Plan; findings: readonly Finding[] } | { ok: false; findings: readonly Finding[] };

@@ -6,13 +6,11 @@ import { evaluate, NO_VALUE, whyNot } from '../run/formula.ts';
 import type { RunCheck, Runtime } from '../run/runtime.ts';
 import { type Place, type PlaceKind, PlaceVisitor } from './places.ts';
 
-/** One evaluation of a check: where, and how it came out. */
-export interface Found {
+/** Where a check was evaluated. The place is kept only where results are written from it. */
+export interface Spot {
   /** Index of the combination, −1 for a check of the member itself. */
   combination: number;
-  /** Ordinal of the place under its combination. */
-  ordinal: number;
-  utilisation: number;
+  place: Place | null;
 }
 
 /** What a check came to over all its combinations and places. */
@@ -20,15 +18,16 @@ export interface Assessment {
   check: RunCheck;
   /** How often it was evaluated; 0: it does not apply to this member. */
   times: number;
-  /** Largest utilisation, where there is any. */
-  worst: Found;
+  /** Largest utilisation; −Infinity where there is none. */
+  utilisation: number;
+  worst: Spot;
   /** First place where the edition refuses the member. */
-  refused: { problem: Problem; combination: number; ordinal: number } | null;
+  refused: (Spot & { problem: Problem }) | null;
   /** First place without an answer. */
-  unanswered: { problem: Problem; combination: number; ordinal: number } | null;
+  unanswered: (Spot & { problem: Problem }) | null;
   /** Worst utilisation and its place under each combination; −Infinity where not evaluated. */
   byCombination: Float64Array;
-  ordinalByCombination: Int32Array;
+  places: (Place | null)[];
 }
 
 /** Utilisation this little above 1 is what rounding leaves of exactly 1. */
@@ -36,12 +35,17 @@ export const ROUNDING = 1e-12;
 
 const kinds: readonly PlaceKind[] = ['moment', 'shear', 'support', 'deflection'];
 
-/** Evaluates every check of the edition under every combination at every place where it applies. */
+/**
+ * Evaluates every check of the edition under every combination at every place where it applies.
+ *
+ * @param keep Whether to keep the places, for a result with its ledger.
+ */
 export function assess(
   runtime: Runtime,
   env: Env,
   context: Context,
   combinations: readonly ExpandedCombination[],
+  keep: boolean,
 ): Assessment[] {
   const assessments = runtime.checks.map((check) => newAssessment(check, combinations.length));
   const { situation } = context;
@@ -57,13 +61,13 @@ export function assess(
         );
         if (here.length === 0) continue;
         if (combination.problem) {
-          for (const assessment of here) note(assessment, combination.problem, c, 0);
+          for (const assessment of here) note(assessment, combination.problem, c, null);
           continue;
         }
         visitor.visit(kind, combination, (place) => {
           atPlace(runtime, env, context, place);
           for (let i = 0; i < here.length; i += 1) {
-            assessAt(here[i] as Assessment, env, c, place.ordinal);
+            assessAt(here[i] as Assessment, env, c, place, keep);
           }
         });
       }
@@ -71,7 +75,7 @@ export function assess(
   }
   atMember(runtime, env, context);
   for (const assessment of assessments) {
-    if (assessment.check.kind === 'member') assessAt(assessment, env, -1, 0);
+    if (assessment.check.kind === 'member') assessAt(assessment, env, -1, null, keep);
   }
   return assessments;
 }
@@ -107,46 +111,56 @@ function newAssessment(check: RunCheck, combinations: number): Assessment {
   return {
     check,
     times: 0,
-    worst: { combination: -1, ordinal: 0, utilisation: -Infinity },
+    utilisation: -Infinity,
+    worst: { combination: -1, place: null },
     refused: null,
     unanswered: null,
     byCombination: new Float64Array(combinations).fill(-Infinity),
-    ordinalByCombination: new Int32Array(combinations),
+    places: [],
   };
 }
 
-function note(assessment: Assessment, problem: Problem, combination: number, ordinal: number): void {
+function note(assessment: Assessment, problem: Problem, combination: number, place: Place | null): void {
   assessment.times += 1;
-  const found = { problem, combination, ordinal };
+  const found = { problem, combination, place: place && { ...place } };
   if (problem.kind === 'refused') assessment.refused ??= found;
   else assessment.unanswered ??= found;
 }
 
-function assessAt(assessment: Assessment, env: Env, combination: number, ordinal: number): void {
+function assessAt(
+  assessment: Assessment,
+  env: Env,
+  combination: number,
+  place: Place | null,
+  keep: boolean,
+): void {
   const { check } = assessment;
   if (check.applies) {
     const trial = check.applies.test(env);
     if (trial === UNKNOWN) {
-      note(assessment, firstProblem(check.applies.slots, env), combination, ordinal);
+      note(assessment, firstProblem(check.applies.slots, env), combination, place);
       return;
     }
     if (trial !== HOLDS) return;
   }
   const utilisation = utilisationAt(check, env);
   if (Number.isNaN(utilisation)) {
-    note(assessment, problemAt(check, env), combination, ordinal);
+    note(assessment, problemAt(check, env), combination, place);
     return;
   }
   assessment.times += 1;
-  const { worst } = assessment;
-  if (utilisation > worst.utilisation) {
-    worst.utilisation = utilisation;
-    worst.combination = combination;
-    worst.ordinal = ordinal;
+  const worse = utilisation > assessment.utilisation;
+  const worseHere = combination >= 0 && utilisation > (assessment.byCombination[combination] as number);
+  if (!worse && !worseHere) return;
+  const kept = keep && place ? { ...place } : null;
+  if (worse) {
+    assessment.utilisation = utilisation;
+    assessment.worst.combination = combination;
+    assessment.worst.place = kept;
   }
-  if (combination >= 0 && utilisation > (assessment.byCombination[combination] as number)) {
+  if (worseHere) {
     assessment.byCombination[combination] = utilisation;
-    assessment.ordinalByCombination[combination] = ordinal;
+    if (keep) assessment.places[combination] = kept;
   }
 }
 

@@ -10,8 +10,8 @@ export interface GivenLoad {
   action: number;
   load: BeamLoad;
   direction: 'plan' | 'slope' | 'normal';
-  /** Multiplied in for loads on an area. */
-  width: number | null;
+  /** Load on an area, before the width it reaches the member over. */
+  area?: number;
 }
 
 /** A member document read against an edition, in the edition's coherent units. */
@@ -248,12 +248,12 @@ function readLoad(
   if (load.kind === 'point') {
     const x = amount(load.x, 'x', units.length);
     const force = amount(load.force, 'force', units.force);
-    return { ...common, width: null, load: { kind: 'point', x, force } };
+    return { ...common, load: { kind: 'point', x, force } };
   }
   if (load.kind === 'couple') {
     const x = amount(load.x, 'x', units.length);
     const moment = amount(load.moment, 'moment', units.couple);
-    return { ...common, width: null, load: { kind: 'couple', x, moment } };
+    return { ...common, load: { kind: 'couple', x, moment } };
   }
   const from = load.from === undefined ? 0 : amount(load.from, 'from', units.length);
   const to = load.to === undefined ? Infinity : amount(load.to, 'to', units.length);
@@ -264,7 +264,7 @@ function readLoad(
   if (load.kind === 'line') {
     const startIntensity = amount(load.start, 'start', units.line);
     const endIntensity = load.end === undefined ? startIntensity : amount(load.end, 'end', units.line);
-    return { ...common, width: null, load: { kind: 'line', from, to, startIntensity, endIntensity } };
+    return { ...common, load: { kind: 'line', from, to, startIntensity, endIntensity } };
   }
   const intensity = amount(load.intensity, 'intensity', units.area);
   if (width === null) {
@@ -278,7 +278,7 @@ function readLoad(
   const line = intensity * width;
   return {
     ...common,
-    width,
+    area: intensity,
     load: { kind: 'line', from, to, startIntensity: line, endIntensity: line },
   };
 }

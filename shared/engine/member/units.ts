@@ -1,12 +1,4 @@
-import type { Edition, Member } from '#shared/basis/schema/index.ts';
-
-type System = Edition['unitSystem'];
-
-/** Millimetres to an inch and newtons to a pound-force: international yard and pound agreement, 1959. */
-const MM_PER_INCH = 25.4;
-const N_PER_LBF = 4.4482216152605;
-/** kg/m3 to lb/ft3. */
-const DENSITY = 0.45359237 / 0.3048 ** 3;
+import { coherentFactor, type Dimension, unitOf, type UnitSystem } from '#shared/units/units.ts';
 
 /** Multipliers from a member document's units to the coherent units of an edition. */
 export interface UnitFactors {
@@ -19,31 +11,32 @@ export interface UnitFactors {
   couple: number;
 }
 
-/** The document's own units, to coherent units of its own system: mm and N, in and lbf. */
-const coherent: Record<Member['units'], UnitFactors> = {
-  metric: { length: 1, area: 1e-3, line: 1, force: 1e3, couple: 1e6 },
-  'inch-pound': { length: 1, area: 1 / 144, line: 1 / 12, force: 1, couple: 12 },
+/** Units in which a member document is written. */
+const written: Record<UnitSystem, Record<keyof UnitFactors, string>> = {
+  metric: { length: 'mm', area: 'kN/m2', line: 'kN/m', force: 'kN', couple: 'kN m' },
+  'inch-pound': { length: 'in', area: 'psf', line: 'plf', force: 'lbf', couple: 'lbf ft' },
 };
 
-/** Multiplier of a quantity of dimension length^a × force^b × density^c between coherent unit systems. */
-export function systemFactor(from: System, to: System, length: number, force: number, density = 0): number {
-  if (from === to) return 1;
-  const direction = from === 'inch-pound' ? 1 : -1;
-  return (
-    MM_PER_INCH ** (direction * length) *
-    N_PER_LBF ** (direction * force) *
-    DENSITY ** (-direction * density * -1)
-  );
+/** Multipliers for a member document in `from` checked to an edition in `to`. */
+export function unitFactors(from: UnitSystem, to: UnitSystem): UnitFactors {
+  const units = written[from];
+  return {
+    length: factorOf(units.length, to),
+    area: factorOf(units.area, to),
+    line: factorOf(units.line, to),
+    force: factorOf(units.force, to),
+    couple: factorOf(units.couple, to),
+  };
 }
 
-/** Multipliers for a member document in `from` checked to an edition in `to`. */
-export function unitFactors(from: Member['units'], to: System): UnitFactors {
-  const own = coherent[from];
-  return {
-    length: own.length * systemFactor(from, to, 1, 0),
-    area: own.area * systemFactor(from, to, -2, 1),
-    line: own.line * systemFactor(from, to, -1, 1),
-    force: own.force * systemFactor(from, to, 0, 1),
-    couple: own.couple * systemFactor(from, to, 1, 1),
-  };
+/** Multiplier from a unit to the coherent unit of a system; 1 for a unit without a name in the list. */
+export function factorOf(unit: string, to: UnitSystem): number {
+  const known = unitOf(unit);
+  return known ? coherentFactor(known, to) : 1;
+}
+
+/** Multiplier of a quantity between the coherent units of two systems. */
+export function systemFactor(from: UnitSystem, to: UnitSystem, dimension: Dimension): number {
+  if (from === to) return 1;
+  return coherentFactor({ symbol: '', system: from, dimension, factor: 1 }, to);
 }

@@ -49,8 +49,11 @@ export const builtIns: Readonly<Record<string, BuiltIn>> = {
   grade: always(({ given }) => given.grade.id),
 
   duration: {
-    read: ({ combination, edition }) => combination && (edition.durations[combination.duration]?.id ?? null),
-    missing: 'there is no combination here',
+    read: ({ combination, pattern, edition }) =>
+      combination
+        ? (edition.durations[combination.duration]?.id ?? null)
+        : (edition.combinations[pattern]?.duration ?? null),
+    missing: 'the duration of a combination is known only once its factors are',
   },
   combination: {
     read: ({ pattern, edition }) => edition.combinations[pattern]?.id ?? null,

@@ -1,0 +1,4 @@
+export { check } from './check.ts';
+export { verdict, type QuickVerdict } from './verdict.ts';
+export { ENGINE_VERSION } from './version.ts';
+export type * from './types.ts';

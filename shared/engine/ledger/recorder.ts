@@ -1,0 +1,119 @@
+import type { Context } from '../run/context.ts';
+import type { Env } from '../run/env.ts';
+import type { FormulaRun } from '../run/formula.ts';
+import type { Runtime, RunSymbol } from '../run/runtime.ts';
+import type { LedgerEntry } from '../types.ts';
+import { recordBuiltIn } from './builtIns.ts';
+import { recordClause } from './clauses.ts';
+import { recordActionValue, recordChoice, recordGradeValue, recordInput } from './stored.ts';
+import { substitute, type Template, templateOf } from './substitute.ts';
+
+export type Draft = Omit<LedgerEntry, 'n'>;
+export type Uses = Record<string, number>;
+
+/**
+ * Writes the ledger while the evaluation stands at the place concerned. An entry is written after those
+ * it uses, and once for each value, however many checks look at it.
+ */
+export class Recorder {
+  readonly entries: LedgerEntry[] = [];
+  readonly runtime: Runtime;
+  readonly env: Env;
+  readonly context: Context;
+  readonly #known = new Map<string, number>();
+  readonly #templates: Map<string, Template>;
+
+  constructor(runtime: Runtime, env: Env, context: Context, templates: Map<string, Template>) {
+    this.runtime = runtime;
+    this.env = env;
+    this.context = context;
+    this.#templates = templates;
+  }
+
+  /** Entry under a key, made on first use. */
+  once(key: string, make: () => Draft): number {
+    const known = this.#known.get(key);
+    if (known !== undefined) return known;
+    const n = this.add(make());
+    this.#known.set(key, n);
+    return n;
+  }
+
+  add(draft: Draft): number {
+    const n = this.entries.length;
+    this.entries.push({ n, ...draft });
+    return n;
+  }
+
+  /** Entry of a symbol's value where the evaluation stands. */
+  symbol(symbol: string): number {
+    const slot = this.runtime.slotOf.get(symbol);
+    const known = slot === undefined ? undefined : this.runtime.symbols[slot];
+    if (!known) throw new RangeError(`The edition has no symbol ${symbol}.`);
+    return this.once(`${symbol}${this.scopeOf(known)}`, () => this.#write(known));
+  }
+
+  /** Entries of several symbols, by name. */
+  symbols(symbols: readonly string[], into: Uses = {}): Uses {
+    for (const symbol of symbols) into[symbol] ??= this.symbol(symbol);
+    return into;
+  }
+
+  /** Formula as written and with the numbers of the entries it uses. */
+  formula(text: string, uses: Readonly<Uses>): { formula: string; substituted: string } {
+    const names = Object.keys(uses);
+    const key = `${text}|${names.join()}`;
+    let template = this.#templates.get(key);
+    if (!template) {
+      template = templateOf(text, names);
+      this.#templates.set(key, template);
+    }
+    return {
+      formula: text,
+      substituted: substitute(template, (symbol) => {
+        const n = uses[symbol];
+        return n === undefined ? null : (this.entries[n] as LedgerEntry).value;
+      }),
+    };
+  }
+
+  /** The same for a formula of the edition, whose symbols are recorded first. */
+  run(formula: FormulaRun, uses: Uses = {}): { formula: string; substituted: string; uses: Uses } {
+    this.symbols(formula.symbols, uses);
+    return { ...this.formula(formula.text, uses), uses };
+  }
+
+  /** What tells values of a symbol at different places apart. */
+  scopeOf({ level, symbol, origin, index }: RunSymbol): string {
+    const { combination, place, action, edition } = this.context;
+    if (level === 'edition' || level === 'member') return '';
+    if (level === 'combination') return `@${combination?.id ?? ''}`;
+    if (level === 'term') return `@${combination?.id ?? ''}@${action}`;
+    if (origin === 'input') {
+      return edition.inputs[index]?.scope === 'span' ? `@span${place?.span ?? -1}` : `@node${place?.node ?? -1}`;
+    }
+    if (origin === 'builtIn' && bySpan.has(symbol)) return `@span${place?.span ?? -1}`;
+    if (origin === 'builtIn' && byNode.has(symbol)) return `@node${place?.node ?? -1}`;
+    return `@${combination?.id ?? ''}@${place?.kind ?? ''}${place?.ordinal ?? -1}`;
+  }
+
+  #write(known: RunSymbol): Draft {
+    switch (known.origin) {
+      case 'builtIn':
+        return recordBuiltIn(this, known);
+      case 'choice':
+        return recordChoice(this, known);
+      case 'input':
+        return recordInput(this, known);
+      case 'gradeColumn':
+        return recordGradeValue(this, known);
+      case 'actionValue':
+        return recordActionValue(this, known);
+      default:
+        return recordClause(this, known);
+    }
+  }
+}
+
+const bySpan = new Set(['L', 'span_kind']);
+const byNode = new Set(['l_b', 'support_kind', 'end_distance']);
