@@ -1,4 +1,7 @@
+export { drivers } from './answers/drivers.ts';
+export { findSections, type FindOptions, nextInStock, sectionSearch } from './answers/sections.ts';
+export { requiredDepth } from './answers/sizing.ts';
 export { check } from './check.ts';
-export { verdict, type QuickVerdict } from './verdict.ts';
-export { ENGINE_VERSION } from './version.ts';
 export type * from './types.ts';
+export { type QuickVerdict, verdict } from './verdict.ts';
+export { ENGINE_VERSION } from './version.ts';

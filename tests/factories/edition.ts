@@ -219,7 +219,9 @@ export function testEdition(change: Partial<Edition> = {}): Edition {
         id: 'bearing-factor',
         title: 'Bearing length',
         unit: '1',
-        keys: [{ title: 'Length', match: 'linear', unit: 'mm', outside: 'clamp', points: [10, 50, 100, 150] }],
+        keys: [
+          { title: 'Length', match: 'linear', unit: 'mm', outside: 'clamp', points: [10, 50, 100, 150] },
+        ],
         values: [1.7, 1.3, 1.1, 1],
         provenance: invented,
       },
@@ -228,7 +230,13 @@ export function testEdition(change: Partial<Edition> = {}): Edition {
         title: 'Creep',
         unit: '1',
         keys: [
-          { title: 'Family', match: 'exact', unit: 'word', outside: 'refuse', points: ['softwood', 'hardwood'] },
+          {
+            title: 'Family',
+            match: 'exact',
+            unit: 'word',
+            outside: 'refuse',
+            points: ['softwood', 'hardwood'],
+          },
           { title: 'Exposure', match: 'exact', unit: 'word', outside: 'refuse', points: ['dry', 'wet'] },
         ],
         values: [0.6, 2, 0.5, 1.8],
@@ -561,12 +569,7 @@ export function testEdition(change: Partial<Edition> = {}): Edition {
   };
 }
 
-function quantity(
-  symbol: string,
-  title: string,
-  unit: string,
-  formula: string,
-): Edition['clauses'][number] {
+function quantity(symbol: string, title: string, unit: string, formula: string): Edition['clauses'][number] {
   return {
     id: symbol.toLowerCase().replace('_', '-'),
     symbol,

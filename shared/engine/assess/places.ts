@@ -1,14 +1,7 @@
 import type { ExpandedCombination, ExpandedTerm } from '../combine/expand.ts';
 import { DEFLECTION_TERMS, MOMENT_TERMS, valueAt } from '../effects/grid.ts';
 import { deflectionPeak, type GridPeak, momentPeaks } from '../effects/peaks.ts';
-import {
-  arrangementCount,
-  caseOf,
-  effectsOf,
-  nodalOf,
-  type Situation,
-  superpose,
-} from './situation.ts';
+import { arrangementCount, caseOf, effectsOf, nodalOf, type Situation, superpose } from './situation.ts';
 
 export type PlaceKind = 'moment' | 'shear' | 'support' | 'deflection';
 

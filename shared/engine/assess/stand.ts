@@ -165,7 +165,8 @@ function geometryOf(
   let rule: SpanRule = { rule: 'centres' };
   if (span.rule === 'clearPlus') {
     const allowance = memberValue(runtime, env, span.allowance);
-    if (!allowance.ok) return { ok: false, findings: [finding('no-span-rule', '', allowance.problem.message)] };
+    if (!allowance.ok)
+      return { ok: false, findings: [finding('no-span-rule', '', allowance.problem.message)] };
     rule = { rule: 'clearPlus', allowance: allowance.value };
   }
   return layOut(
@@ -229,7 +230,10 @@ function analyse(
   if (memo?.model && memo.key === key) return { ok: true, model: memo.model };
   const built = buildModel(geometry, given.restraints, actions, ratio);
   if (!built.ok) {
-    return { ok: false, findings: built.problems.map(({ code, message }) => finding(code, '/spans', message)) };
+    return {
+      ok: false,
+      findings: built.problems.map(({ code, message }) => finding(code, '/spans', message)),
+    };
   }
   if (memo) {
     memo.key = key;
@@ -304,4 +308,3 @@ function notAssessed(assessments: readonly Assessment[]): Finding[] {
       in: 'edition',
     }));
 }
-

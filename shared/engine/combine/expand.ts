@@ -187,7 +187,10 @@ function write(
 function durationOf(edition: Edition, pattern: CombinationPattern, terms: readonly ExpandedTerm[]): number {
   const at = (id: string) => edition.durations.findIndex((duration) => duration.id === id);
   if (pattern.duration !== undefined) return at(pattern.duration);
-  return terms.reduce((shortest, { action }) => Math.max(shortest, at(actionAt(edition, action).duration)), 0);
+  return terms.reduce(
+    (shortest, { action }) => Math.max(shortest, at(actionAt(edition, action).duration)),
+    0,
+  );
 }
 
 function idOf(
@@ -214,7 +217,10 @@ function titleOf(edition: Edition, terms: readonly ExpandedTerm[]): string {
     .join('');
 }
 
-function keyOf({ pattern, state, duration, terms, problem }: ExpandedCombination, byPattern: boolean): string {
+function keyOf(
+  { pattern, state, duration, terms, problem }: ExpandedCombination,
+  byPattern: boolean,
+): string {
   const factors = terms.map(({ action, factor }) => `${action}:${factor}`).join(',');
   return `${byPattern ? pattern : ''}|${state}|${duration}|${factors}|${problem ? pattern : ''}`;
 }

@@ -66,7 +66,10 @@ function group(tests: readonly ConditionTest[], settledBy: typeof HOLDS | typeof
   };
 }
 
-function comparison({ fact, operator, value }: Comparison, slotOf: (symbol: string) => number): ConditionTest {
+function comparison(
+  { fact, operator, value }: Comparison,
+  slotOf: (symbol: string) => number,
+): ConditionTest {
   const slot = slotOf(fact);
   if (typeof value === 'object' && 'fact' in value) {
     const other = slotOf(value.fact);

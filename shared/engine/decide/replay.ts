@@ -28,7 +28,9 @@ export async function replay(
   }
   const engine = new Engine(told.map(ruleOf));
   const { results, failureResults } = await engine.run(facts);
-  const byCase = new Map([...results, ...failureResults].map((result) => [result.name, result.toJSON(false)]));
+  const byCase = new Map(
+    [...results, ...failureResults].map((result) => [result.name, result.toJSON(false)]),
+  );
   return told.flatMap(({ case: name, when, holds, evidence }) => {
     const result = byCase.get(name);
     if (!result) return [`The rules engine did not try case “${name}”.`];

@@ -92,7 +92,9 @@ function memberAt(symbol: string): { in: 'member'; pointer: string } {
 function summed(recorder: Recorder, symbol: string, unit: string) {
   const { place, geometry } = recorder.context;
   const onlyVariable = symbol.endsWith('_variable');
-  const effect = (onlyVariable ? symbol.slice(0, -'_variable'.length) : symbol.replace('_up', '')) as SummedEffect;
+  const effect = (
+    onlyVariable ? symbol.slice(0, -'_variable'.length) : symbol.replace('_up', '')
+  ) as SummedEffect;
   const { sum, uses } = recordSum(recorder, effect, unit, onlyVariable);
   const sloping = effect === 'R' && geometry?.cosine !== 1;
   if (sloping) recorder.symbols(['slope'], uses);

@@ -110,7 +110,12 @@ function departed(recorder: Recorder, known: RunSymbol, run: RunClause, made: Dr
   const stored = env.value(known.slot);
   env.setNumber(known.slot, value as number);
   const index = context.given.member.departures.indexOf(departure);
-  const { formula: _f, substituted: _s, lookup: _l, refused: _r, ...rest } = made;
+  // How the edition would come to its value is not how this one came about.
+  const rest = { ...made };
+  delete rest.formula;
+  delete rest.substituted;
+  delete rest.lookup;
+  delete rest.refused;
   return {
     ...rest,
     value,

@@ -108,7 +108,9 @@ function arrangement(recorder: Recorder, place: Place, action: number): string {
   const effects = situation && effectsOf(situation, action);
   if (!effects || effects.cases.length === 1) return '';
   const spans = situation.model.arrangements[place.arrangement] ?? [];
-  return spans.length === situation.model.beam.spans.length ? ', all spans loaded' : `, on ${spanNames(spans)}`;
+  return spans.length === situation.model.beam.spans.length
+    ? ', all spans loaded'
+    : `, on ${spanNames(spans)}`;
 }
 
 function partValue(recorder: Recorder, effect: SummedEffect, place: Place, action: number): number {
@@ -160,7 +162,13 @@ function loadDraft(recorder: Recorder, index: number): Draft {
   const head = { kind: 'input', symbol: `q_${index + 1}`, in: 'member', uses: {} } as const;
   const title = source.title ?? action;
   if (load.load.kind === 'point') {
-    return { ...head, title, value: load.load.force, unit: force as string, pointer: `/loads/${index}/force` };
+    return {
+      ...head,
+      title,
+      value: load.load.force,
+      unit: force as string,
+      pointer: `/loads/${index}/force`,
+    };
   }
   if (load.load.kind === 'couple') {
     return {

@@ -90,7 +90,9 @@ export class Recorder {
     if (level === 'combination') return `@${combination?.id ?? ''}`;
     if (level === 'term') return `@${combination?.id ?? ''}@${action}`;
     if (origin === 'input') {
-      return edition.inputs[index]?.scope === 'span' ? `@span${place?.span ?? -1}` : `@node${place?.node ?? -1}`;
+      return edition.inputs[index]?.scope === 'span'
+        ? `@span${place?.span ?? -1}`
+        : `@node${place?.node ?? -1}`;
     }
     if (origin === 'builtIn' && bySpan.has(symbol)) return `@span${place?.span ?? -1}`;
     if (origin === 'builtIn' && byNode.has(symbol)) return `@node${place?.node ?? -1}`;

@@ -60,7 +60,9 @@ export function readMember(edition: Edition, member: Member): Reading {
   if (!(Number.isInteger(section.pieces) && section.pieces >= 1 && section.pieces <= 20)) {
     find('bad-pieces', '/section/pieces', 'The pieces acting together are a whole number from 1 to 20.');
   }
-  const bNominal = section.nominal ? length(section.nominal.b, '/section/nominal/b', 'The ordered breadth') : b1;
+  const bNominal = section.nominal
+    ? length(section.nominal.b, '/section/nominal/b', 'The ordered breadth')
+    : b1;
   const hNominal = section.nominal ? length(section.nominal.h, '/section/nominal/h', 'The ordered depth') : h;
 
   if (member.spans.length < 1 || member.spans.length > 50) {
@@ -148,7 +150,8 @@ function readChoices(
 ): Record<string, string | null> {
   const chosen: Record<string, string | null> = {};
   for (const choice of edition.choices) {
-    const given = choice.scope === 'grade' ? grade?.choices[choice.symbol] : own(member.choices, choice.symbol);
+    const given =
+      choice.scope === 'grade' ? grade?.choices[choice.symbol] : own(member.choices, choice.symbol);
     const option = given ?? choice.default ?? null;
     chosen[choice.symbol] = option;
     if (option !== null && !hasOption(choice, option)) {

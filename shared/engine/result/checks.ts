@@ -21,7 +21,8 @@ export function checkResult(standing: Standing, recorder: Recorder, assessment: 
   moveTo(standing, spot);
   const utilisation = utilisationOf(assessment);
   const entry = recordCheck(recorder, assessment, place, combinations[spot.combination]);
-  const problem = assessment.refused?.problem ?? (utilisation === null ? assessment.unanswered?.problem : undefined);
+  const problem =
+    assessment.refused?.problem ?? (utilisation === null ? assessment.unanswered?.problem : undefined);
   const part = (formula: FormulaRun | null, head: { title: string; unit: string } | undefined) => {
     const value = formula && head ? evaluate(formula, env) : NaN;
     return head && !Number.isNaN(value) ? { value, unit: head.unit, title: head.title } : null;
@@ -91,7 +92,8 @@ function recordCheck(
     in: 'edition',
     pointer: `/checks/${check.index}`,
   } as const;
-  const problem = assessment.refused?.problem ?? (head.value === null ? assessment.unanswered?.problem : undefined);
+  const problem =
+    assessment.refused?.problem ?? (head.value === null ? assessment.unanswered?.problem : undefined);
   const refused = problem ? { refused: problem.message } : {};
   // Without a place there is nothing to read: the factors of the combination themselves have no value.
   if (!place && check.kind !== 'member') return recorder.add({ ...head, ...refused, uses: {} });

@@ -14,7 +14,10 @@ export interface BuiltIn {
 
 const notHere = 'it does not exist at this place';
 
-const atPlace = (read: (place: Place, context: Context) => number | string | null, missing = notHere): BuiltIn => ({
+const atPlace = (
+  read: (place: Place, context: Context) => number | string | null,
+  missing = notHere,
+): BuiltIn => ({
   read: (context) => (context.place ? read(context.place, context) : null),
   missing,
 });
@@ -42,7 +45,8 @@ export const builtIns: Readonly<Record<string, BuiltIn>> = {
   tributary: { read: ({ given }) => given.tributary, missing: 'no tributary width is given' },
   spans: always(({ given }) => given.lengths.length),
   L_max: {
-    read: ({ geometry }) => geometry && geometry.spans.reduce((most, { length }) => Math.max(most, length), 0),
+    read: ({ geometry }) =>
+      geometry && geometry.spans.reduce((most, { length }) => Math.max(most, length), 0),
     missing: 'the spans are not worked out yet where this is needed',
   },
   slope: always(({ given }) => given.slope),
@@ -91,7 +95,10 @@ export const builtIns: Readonly<Record<string, BuiltIn>> = {
     ({ node }, { given }) => (node === 0 || node === given.restraints.length - 1 ? 'end' : 'inner'),
     notHere,
   ),
-  l_b: atNode(({ node }, { given }) => given.bearings[node] ?? null, 'no bearing length is given at this support'),
+  l_b: atNode(
+    ({ node }, { given }) => given.bearings[node] ?? null,
+    'no bearing length is given at this support',
+  ),
   end_distance: atNode(endDistance, 'no bearing length is given at this support'),
 };
 

@@ -20,7 +20,12 @@ export function spanKind(restraints: readonly Restraint[], span: number): SpanKi
  * Form of the loads on a span. `uniform`: even line loads over the whole span; `point`: point loads only;
  * `mixed`: anything else; `end-moment`: no load of its own, but a moment from its ends.
  */
-export function loadForm(loads: readonly BeamLoad[], from: number, to: number, momentInside: boolean): LoadForm {
+export function loadForm(
+  loads: readonly BeamLoad[],
+  from: number,
+  to: number,
+  momentInside: boolean,
+): LoadForm {
   const tolerance = (to - from) * 1e-9;
   let uniform = false;
   let point = false;
