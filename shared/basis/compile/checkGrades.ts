@@ -60,6 +60,27 @@ function outliers(edition: Edition, findings: Findings): void {
   });
 }
 
+/** Grades without a property that checks may come to need, said once a column. */
+function missingProperties(
+  edition: Edition,
+  needed: ReadonlyMap<string, readonly string[]>,
+  findings: Findings,
+): void {
+  const { columns, rows } = edition.grades;
+  columns.forEach(({ symbol, title }, index) => {
+    const checks = needed.get(symbol);
+    const without = rows.filter((row) => row.values[symbol] === undefined).map((row) => row.title);
+    if (!checks || without.length === 0) return;
+    const named =
+      without.length > 4
+        ? `${without.slice(0, 3).join(', ')} and ${without.length - 3} more`
+        : without.join(', ');
+    const have = without.length === 1 ? 'has' : 'have';
+    const message = `${named} ${have} no ${title.toLowerCase()}. ${[...new Set(checks)].join(', ')} may need it; a member that does gets no verdict.`;
+    findings.warning('missing-property', `/grades/columns/${index}`, message);
+  });
+}
+
 /** Checks the grade table: columns, options, bands, missing and unusual values. */
 export function checkGrades(
   edition: Edition,
@@ -116,13 +137,7 @@ export function checkGrades(
         );
       }
     }
-    for (const { symbol, title } of columns) {
-      const checks = needed.get(symbol);
-      if (checks && row.values[symbol] === undefined) {
-        const message = `${row.title} has no ${title.toLowerCase()}. ${checks.join(', ')} may need it; a member that does gets no verdict.`;
-        findings.warning('missing-property', `${pointer}/values`, message);
-      }
-    }
   });
+  missingProperties(edition, needed, findings);
   outliers(edition, findings);
 }
