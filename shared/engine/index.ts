@@ -1,7 +1,11 @@
-export { drivers } from './answers/drivers.ts';
+export { curves } from './answers/curves.ts';
+export { drivers, entriesBehind } from './answers/drivers.ts';
 export { findSections, type FindOptions, nextInStock, sectionSearch } from './answers/sections.ts';
 export { requiredDepth } from './answers/sizing.ts';
 export { check } from './check.ts';
+export { compile } from './compile.ts';
+export { type ProofLine, type ProofResult, runProofs } from './proofs.ts';
 export type * from './types.ts';
 export { type QuickVerdict, verdict } from './verdict.ts';
+export { resultHash, verify } from './verify.ts';
 export { ENGINE_VERSION } from './version.ts';

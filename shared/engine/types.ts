@@ -250,18 +250,9 @@ export type CompileOutcome =
   { ok: true; plan: Plan; findings: readonly Finding[] } | { ok: false; findings: readonly Finding[] };
 
 /*
- * The engine's public functions (shared/engine/index.ts and shared/basis/index.ts):
- *
- *   compile(edition: Edition): CompileOutcome                     — never throws
- *   check(plan, member, options?: { curves?: boolean }): Result   — never throws; synchronous, pure
- *   verdict(plan, member): Result['verdict'] & { checks: {id, utilisation, word}[] }  — hot path, no ledger
- *   curves(plan, member): Curves
- *   drivers(plan, member): Driver[]
- *   requiredDepth(plan, member): RequiredDepth
- *   nextInStock(plan, member, stock): StockSection | null
- *   findSections(plan, member, {stock, grades, rank: 'depth'|'volume'|'cost'}): FoundSection[]
- *   attest(plan, result): Promise<Finding[]>   — json-rules-engine decides every decision of the ledger again
- *   verify(edition, member, stored: Result): Promise<{ same: boolean; differences: string[] }>
- *   editionHash(edition), memberHash(member), resultHash(result)  — SHA-256 over RFC 8785, hex
+ * The engine's public functions are in shared/engine/index.ts: compile, check, verdict, curves, drivers,
+ * requiredDepth, nextInStock, findSections, runProofs, verify, resultHash. All pure and synchronous, none
+ * throws. `attest` (json-rules-engine decides every decision again) is in shared/engine/attest.ts and
+ * asynchronous.
  */
 export type { Condition, Departure, Edition, Member };
