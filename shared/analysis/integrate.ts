@@ -1,111 +1,104 @@
-import { evaluate } from './polynomial.ts';
+import type { Section } from './section.ts';
 import type { SpanLoads } from './spanLoads.ts';
+import type { Piece } from './types.ts';
 
-/** What is known at a section. Rotation is that of the section, not of the axis, where shear deforms. */
-export interface SectionState {
-  shear: number;
-  moment: number;
-  rotation: number;
-  deflection: number;
-}
-
-/** Polynomials of one stretch without jumps, in the distance from its start. */
-export interface Stretch {
-  from: number;
-  to: number;
-  shear: number[];
-  moment: number[];
-  rotation: number[];
-  deflection: number[];
+/** The four effects along the member as they are written down, stretch by stretch. */
+export interface Course {
+  shear: Piece[];
+  moment: Piece[];
+  rotation: Piece[];
+  deflection: Piece[];
 }
 
 /** Places in a span where something begins, ends or jumps, with both ends of the span. */
-export function breaksOf({ lines, points, couples }: SpanLoads, length: number): number[] {
-  if (points.length === 0 && couples.length === 0 && lines.every((l) => l.from === 0 && l.to === length)) {
-    return [0, length];
+export function breaksOf({ lines, points, couples }: SpanLoads, length: number, trace: number): number[] {
+  const all: number[] = [];
+  for (const { from, to } of lines) {
+    if (from > trace) all.push(from);
+    if (to < length - trace) all.push(to);
   }
-  const all = [0, length];
-  for (const { from, to } of lines) all.push(from, to);
   for (const { at } of points) all.push(at);
   for (const { at } of couples) all.push(at);
+  if (all.length === 0) return [0, length];
   all.sort((a, b) => a - b);
-  const trace = length * 1e-12;
   const kept = [0];
-  for (const x of all) if (x - (kept[kept.length - 1] as number) > trace) kept.push(x);
-  kept[kept.length - 1] = length;
+  let last = 0;
+  for (const x of all) {
+    if (x - last <= trace) continue;
+    kept.push(x);
+    last = x;
+  }
+  kept.push(length);
   return kept;
 }
 
 /**
- * Integrates the differential equations of the member along one span from its left end:
- * V' = −q, M' = V, ψ' = −M / EI, w' = ψ + V / GA. Exact, since the load is piecewise linear.
+ * Integrates the differential equations of the member along one span from the state at its left end:
+ * V' = −q, M' = V, EI ψ' = −M, w' = ψ + V / GA. Exact, since between breaks the load is linear.
  *
- * @param flexibility 1 / EI.
- * @param shearFlexibility 1 / GA, 0 without shear deformation.
- * @returns The stretches, and the state at the right end.
+ * @param origin Place of the span's left end on the member; `end` of its right end.
+ * @param flexibility 1 / EI, by which rotation and deflection are multiplied when written down.
+ * @param shearFlexibility EI / GA, 0 without shear deformation.
+ * @returns The state at the span's right end.
  */
 export function integrateSpan(
+  course: Course,
   loads: SpanLoads,
   breaks: readonly number[],
-  start: SectionState,
+  start: Section,
+  origin: number,
+  end: number,
   flexibility: number,
   shearFlexibility: number,
-): { stretches: Stretch[]; end: SectionState } {
-  const stretches: Stretch[] = [];
-  let state = start;
-  for (let k = 0; k + 1 < breaks.length; k += 1) {
-    const from = breaks[k] as number;
-    const to = breaks[k + 1] as number;
-    const length = to - from;
-    state = jumped(state, loads, from, length);
-    let q0 = 0;
-    let q1 = 0;
-    const middle = (from + to) / 2;
+): Section {
+  let { shear, moment, rotation, deflection } = start;
+  const last = breaks.length - 2;
+  for (let k = 0; k <= last; k += 1) {
+    const left = breaks[k] as number;
+    const right = breaks[k + 1] as number;
+    for (const { at, force } of loads.points) if (at >= left && at < right) shear -= force;
+    for (const { at, moment: couple } of loads.couples) if (at >= left && at < right) moment += couple;
+    let q = 0;
+    let slope = 0;
+    const middle = (left + right) / 2;
     for (const line of loads.lines) {
       if (middle < line.from || middle > line.to) continue;
-      const slope = (line.end - line.start) / (line.to - line.from);
-      q0 += line.start + slope * (from - line.from);
-      q1 += slope;
+      const rise = (line.end - line.start) / (line.to - line.from);
+      q += line.start + rise * (left - line.from);
+      slope += rise;
     }
-    const shear = [state.shear, -q0, -q1 / 2];
-    const moment = [state.moment, state.shear, -q0 / 2, -q1 / 6];
-    const rotation = [
-      state.rotation,
-      -state.moment * flexibility,
-      (-state.shear / 2) * flexibility,
-      (q0 / 6) * flexibility,
-      (q1 / 24) * flexibility,
-    ];
-    const deflection = [
-      state.deflection,
-      state.rotation + state.shear * shearFlexibility,
-      (-state.moment / 2) * flexibility - (q0 / 2) * shearFlexibility,
-      (-state.shear / 6) * flexibility - (q1 / 6) * shearFlexibility,
-      (q0 / 24) * flexibility,
-      (q1 / 120) * flexibility,
-    ];
-    stretches.push({ from, to, shear, moment, rotation, deflection });
-    state = {
-      shear: evaluate(shear, length),
-      moment: evaluate(moment, length),
-      rotation: evaluate(rotation, length),
-      deflection: evaluate(deflection, length),
-    };
+    const from = origin + left;
+    const to = k === last ? end : origin + right;
+    const t = right - left;
+    const f = flexibility;
+    const s = shearFlexibility;
+    course.shear.push({ from, to, coefficients: [shear, -q, -slope / 2] });
+    course.moment.push({ from, to, coefficients: [moment, shear, -q / 2, -slope / 6] });
+    course.rotation.push({
+      from,
+      to,
+      coefficients: [rotation * f, -moment * f, (-shear / 2) * f, (q / 6) * f, (slope / 24) * f],
+    });
+    course.deflection.push({
+      from,
+      to,
+      coefficients: [
+        deflection * f,
+        (rotation + shear * s) * f,
+        ((-moment - q * s) / 2) * f,
+        ((-shear - slope * s) / 6) * f,
+        (q / 24) * f,
+        (slope / 120) * f,
+      ],
+    });
+    deflection +=
+      t *
+      (rotation +
+        shear * s +
+        t * ((-moment - q * s) / 2 + t * ((-shear - slope * s) / 6 + t * (q / 24 + t * (slope / 120)))));
+    rotation += t * (-moment + t * (-shear / 2 + t * (q / 6 + t * (slope / 24))));
+    moment += t * (shear + t * (-q / 2 - t * (slope / 6)));
+    shear -= t * (q + t * (slope / 2));
   }
-  return { stretches, end: state };
-}
-
-/** A point load takes its force off the shear; a clockwise couple adds to the moment. */
-function jumped(
-  state: SectionState,
-  { points, couples }: SpanLoads,
-  x: number,
-  length: number,
-): SectionState {
-  if (points.length === 0 && couples.length === 0) return state;
-  const here = (at: number) => Math.abs(at - x) <= length * 1e-9;
-  let { shear, moment } = state;
-  for (const { at, force } of points) if (here(at)) shear -= force;
-  for (const { at, moment: couple } of couples) if (here(at)) moment += couple;
-  return { ...state, shear, moment };
+  return { shear, moment, rotation, deflection };
 }

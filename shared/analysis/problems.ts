@@ -3,64 +3,107 @@ import type { AnalysisProblem, Beam, BeamLoad } from './types.ts';
 /** More spans than any straight timber has; a bound on the work one member can ask for. */
 export const MOST_SPANS = 50;
 
+/** Shorter than this share of the whole member, a span is a slip of the keyboard. */
+const LEAST_SHARE = 1e-6;
+
+/** How far beyond an end a load may lie before it counts as outside, as a share of the member: rounding. */
+const ROUNDING_SHARE = 1e-12;
+
 /** Everything wrong with the member itself. */
-export function beamProblems({ spans, restraints, EI, GA }: Beam): AnalysisProblem[] {
-  const problems: AnalysisProblem[] = [];
-  if (spans.length === 0) problems.push({ code: 'no-span', message: 'A member needs at least one span.' });
+export function beamProblems(beam: Beam): AnalysisProblem[] {
+  const { spans, restraints, EI, GA } = beam;
+  if (spans.length === 0) {
+    return [{ code: 'no-span', message: 'The member has no span. Enter at least one.' }];
+  }
   if (spans.length > MOST_SPANS) {
-    problems.push({ code: 'too-many-spans', message: `A member has at most ${MOST_SPANS} spans.` });
+    const message = `The member has ${spans.length} spans; at most ${MOST_SPANS} can be analysed. Split it.`;
+    return [{ code: 'too-many-spans', message }];
   }
-  spans.forEach((length, index) => {
-    if (!(length > 0 && Number.isFinite(length))) {
-      problems.push({ code: 'bad-length', message: `Span ${index + 1} needs a length above 0.`, index });
-    }
-  });
-  if (!(EI > 0 && Number.isFinite(EI)) || (GA !== undefined && !(GA > 0 && Number.isFinite(GA)))) {
-    problems.push({ code: 'bad-stiffness', message: 'The stiffness of the member has to be above 0.' });
+  const problems = lengthProblems(spans);
+  if (!isPositive(EI)) {
+    const message = 'The bending stiffness EI of the member has to be a number above 0.';
+    problems.push({ code: 'bad-stiffness', message });
   }
-  if (restraints.length !== spans.length + 1) {
-    problems.push({ code: 'bad-restraints', message: 'A member needs one support more than it has spans.' });
+  if (GA !== undefined && !isPositive(GA)) {
+    const message = 'The shear stiffness GA of the member has to be a number above 0.';
+    problems.push({ code: 'bad-stiffness', message });
   }
-  restraints.forEach((restraint, index) => {
-    if (restraint === 'free' && index > 0 && index < restraints.length - 1) {
-      const message = `Support ${index + 1} lies between spans and can't be free: join the two spans.`;
-      problems.push({ code: 'bad-restraints', message, index });
-    }
-  });
+  problems.push(...restraintProblems(beam));
   const held = restraints.filter((restraint) => restraint !== 'free').length;
   if (problems.length === 0 && held < 2 && !restraints.includes('fixed')) {
-    problems.push({
-      code: 'mechanism',
-      message: 'The member would fall: it needs two supports, or one fixed end.',
-    });
+    const message = 'The member would fall or turn: give it two supports, or fix one end.';
+    problems.push({ code: 'mechanism', message });
   }
   return problems;
 }
 
-/** Everything wrong with the loads. */
-export function loadProblems(loads: readonly BeamLoad[], length: number): AnalysisProblem[] {
+function lengthProblems(spans: readonly number[]): AnalysisProblem[] {
   const problems: AnalysisProblem[] = [];
-  const trace = length * 1e-9;
-  loads.forEach((load, index) => {
-    const numbers =
-      load.kind === 'line'
-        ? [load.from, load.to, load.startIntensity, load.endIntensity]
-        : [load.x, load.kind === 'point' ? load.force : load.moment];
-    if (!numbers.every(Number.isFinite)) {
-      problems.push({
-        code: 'bad-load',
-        message: `Load ${index + 1} has a value that is not a number.`,
-        index,
-      });
-      return;
-    }
-    const [from, to] = load.kind === 'line' ? [load.from, load.to] : [load.x, load.x];
-    if (load.kind === 'line' && !(to > from)) {
-      problems.push({ code: 'bad-load', message: `Load ${index + 1} has to end after it starts.`, index });
-    }
-    if (from < -trace || to > length + trace) {
-      problems.push({ code: 'load-outside', message: `Load ${index + 1} lies outside the member.`, index });
+  let total = 0;
+  for (const length of spans) total += isPositive(length) ? length : 0;
+  spans.forEach((length, index) => {
+    if (!isPositive(length)) {
+      const message = `Span ${index + 1} has to have a length above 0.`;
+      problems.push({ code: 'bad-length', message, index });
+    } else if (length < total * LEAST_SHARE) {
+      const message = `Span ${index + 1} is less than a millionth of the member. Check its length.`;
+      problems.push({ code: 'bad-length', message, index });
     }
   });
   return problems;
+}
+
+function restraintProblems({ spans, restraints }: Beam): AnalysisProblem[] {
+  if (restraints.length !== spans.length + 1) {
+    const message = `A member of ${spans.length} spans has ${spans.length + 1} ends and supports; ${restraints.length} are given.`;
+    return [{ code: 'bad-restraints', message }];
+  }
+  const problems: AnalysisProblem[] = [];
+  restraints.forEach((restraint, index) => {
+    if (restraint === 'free' && index > 0 && index < restraints.length - 1) {
+      const message = `Support ${index + 1} lies between two spans and can't be free. Join the two spans, or support it.`;
+      problems.push({ code: 'bad-restraints', message, index });
+    }
+  });
+  return problems;
+}
+
+/** Everything wrong with the loads of a member of this length. */
+export function loadProblems(loads: readonly BeamLoad[], length: number): AnalysisProblem[] {
+  const problems: AnalysisProblem[] = [];
+  const beyond = length * ROUNDING_SHARE;
+  for (let index = 0; index < loads.length; index += 1) {
+    const load = loads[index] as BeamLoad;
+    if (!isFiniteLoad(load)) {
+      const message = `Load ${index + 1} has a place or a value that is not a finite number.`;
+      problems.push({ code: 'bad-load', message, index });
+      continue;
+    }
+    const from = load.kind === 'line' ? load.from : load.x;
+    const to = load.kind === 'line' ? load.to : load.x;
+    if (Math.min(from, to) < -beyond || Math.max(from, to) > length + beyond) {
+      const message = `Load ${index + 1} reaches beyond the member, which is ${length} long.`;
+      problems.push({ code: 'load-outside', message, index });
+    } else if (load.kind === 'line' && !(to > from)) {
+      const message = `Load ${index + 1} has to end after it starts. For a load at one place use a point load.`;
+      problems.push({ code: 'bad-load', message, index });
+    }
+  }
+  return problems;
+}
+
+function isFiniteLoad(load: BeamLoad): boolean {
+  if (load.kind === 'line') {
+    return (
+      Number.isFinite(load.from) &&
+      Number.isFinite(load.to) &&
+      Number.isFinite(load.startIntensity) &&
+      Number.isFinite(load.endIntensity)
+    );
+  }
+  return Number.isFinite(load.x) && Number.isFinite(load.kind === 'point' ? load.force : load.moment);
+}
+
+function isPositive(value: number): boolean {
+  return value > 0 && Number.isFinite(value);
 }

@@ -1,8 +1,11 @@
-import { breaksOf, integrateSpan, type SectionState, type Stretch } from './integrate.ts';
-import { factorise, type Factorised } from './linear.ts';
+import { breaksOf, type Course, integrateSpan } from './integrate.ts';
+import { nodesOf } from './pieces.ts';
 import { beamProblems, loadProblems } from './problems.ts';
-import { placeLoads, type PlacedLoads } from './spanLoads.ts';
-import type { AnalysisOutcome, AnalysisProblem, Beam, BeamLoad, Effects, Piece } from './types.ts';
+import { carriedByLoads, type Section } from './section.ts';
+import { type PlacedLoads, placeLoads, SAME_PLACE, type SpanLoads } from './spanLoads.ts';
+import { fixedEndMoments, spanStiffness, type SpanStiffness } from './spanStiffness.ts';
+import { factorise, type Tridiagonal } from './tridiagonal.ts';
+import type { AnalysisOutcome, AnalysisProblem, Beam, BeamLoad, Restraint } from './types.ts';
 
 export { MOST_SPANS } from './problems.ts';
 
@@ -13,36 +16,21 @@ export interface Solver {
 
 export type Prepared = { ok: true; solver: Solver } | { ok: false; problems: AnalysisProblem[] };
 
-/** End forces of a span as linear functions of its end displacements and of what its loads do alone. */
-interface SpanRule {
-  length: number;
-  /** Shear and moment at the left end per unit of A (rotation gap × EI) and B (deflection gap × EI). */
-  shearA: number;
-  shearB: number;
-  momentA: number;
-  momentB: number;
-}
-
-/** What a span's loads do from a left end at rest. */
-type Particular = SectionState;
-
-const atRest: SectionState = { shear: 0, moment: 0, rotation: 0, deflection: 0 };
-
 /**
- * Prepares a member for analysis by the displacement method: unknown are the rotation and deflection of each
- * node as far as its restraint leaves them free. Never throws; what can't be analysed comes back as problems.
+ * Prepares a member for analysis by the slope-deflection method: unknown are the rotations at the supports.
+ * A cantilever or overhang adds no unknown, for statics alone give its forces. Never throws; what can't be
+ * analysed comes back as problems.
  */
 export function prepare(beam: Beam): Prepared {
   const problems = beamProblems(beam);
   if (problems.length) return { ok: false, problems };
-  const system = new BeamSystem(beam);
-  if (!system.stands) {
-    return {
-      ok: false,
-      problems: [{ code: 'mechanism', message: 'The member is not held: it would move.' }],
-    };
+  const frame = frameOf(beam);
+  if (!frame) {
+    const message =
+      'The lengths and the stiffness of the member are too large or too small to calculate with.';
+    return { ok: false, problems: [{ code: 'bad-length', message }] };
   }
-  return { ok: true, solver: { solve: (loads) => system.solve(loads) } };
+  return { ok: true, solver: { solve: (loads) => solveFrame(frame, loads) } };
 }
 
 /** Effects of a set of loads on a member: shear, moment, rotation, deflection, reactions. */
@@ -51,192 +39,161 @@ export function solve(beam: Beam, loads: readonly BeamLoad[]): AnalysisOutcome {
   return prepared.ok ? prepared.solver.solve(loads) : prepared;
 }
 
-class BeamSystem {
-  readonly stands: boolean;
-  readonly #beam: Beam;
-  readonly #nodes: number[];
-  readonly #rules: SpanRule[];
-  /** Number of the unknown, or −1 where the restraint holds it at 0. Displacements times EI. */
-  readonly #rotations: Int32Array;
-  readonly #deflections: Int32Array;
-  readonly #unknowns: number;
-  readonly #factorised: Factorised | null;
+interface Frame {
+  restraints: readonly Restraint[];
+  nodes: readonly number[];
+  spans: readonly SpanStiffness[];
+  flexibility: number;
+  shearFlexibility: number;
+  rotations: Tridiagonal;
+}
 
-  constructor(beam: Beam) {
-    this.#beam = beam;
-    this.#nodes = [0];
-    for (const length of beam.spans)
-      this.#nodes.push((this.#nodes[this.#nodes.length - 1] as number) + length);
-    const shear = beam.GA === undefined ? 0 : beam.EI / beam.GA;
-    this.#rules = beam.spans.map((length) => spanRule(length, shear));
-    const count = beam.restraints.length;
-    this.#rotations = new Int32Array(count).fill(-1);
-    this.#deflections = new Int32Array(count).fill(-1);
-    let unknowns = 0;
-    beam.restraints.forEach((restraint, node) => {
-      if (restraint !== 'fixed') this.#rotations[node] = unknowns++;
-      if (restraint === 'free') this.#deflections[node] = unknowns++;
-    });
-    this.#unknowns = unknowns;
-    this.#factorised = this.#assembled();
-    this.stands = this.#factorised !== null;
+function frameOf({ spans: lengths, restraints, EI, GA }: Beam): Frame | null {
+  const shearFlexibility = GA === undefined ? 0 : EI / GA;
+  const nodes = nodesOf(lengths);
+  const spans = lengths.map((length) => spanStiffness(length, shearFlexibility));
+  const diagonal = new Float64Array(nodes.length);
+  const beside = new Float64Array(nodes.length);
+  for (let i = 0; i < spans.length; i += 1) {
+    if (restraints[i] === 'free' || restraints[i + 1] === 'free') continue;
+    const { near, far } = spans[i] as SpanStiffness;
+    diagonal[i] = (diagonal[i] as number) + near;
+    diagonal[i + 1] = (diagonal[i + 1] as number) + near;
+    if (restraints[i] === 'pin' && restraints[i + 1] === 'pin') beside[i] = far;
   }
+  for (let i = 0; i < nodes.length; i += 1) if (restraints[i] !== 'pin') diagonal[i] = 1;
+  const rotations = factorise(diagonal, beside);
+  if (!rotations) return null;
+  return { restraints, nodes, spans, flexibility: 1 / EI, shearFlexibility, rotations };
+}
 
-  /**
-   * Equilibrium at each node: the moment right of it less the moment left of it, and the same for shear,
-   * equals what acts on the node. Each equation has the number of the unknown it belongs to.
-   */
-  #assembled(): Factorised | null {
-    const n = this.#unknowns;
-    const matrix = new Float64Array(n * n);
-    const add = (row: number, column: number, value: number) => {
-      if (row >= 0 && column >= 0) matrix[row * n + column] = (matrix[row * n + column] as number) + value;
-    };
-    this.#rules.forEach((rule, span) => {
-      const { length, shearA, shearB, momentA, momentB } = rule;
-      // Columns: A and B per unit of the displacements at the span's two ends.
-      const columns = [
-        [this.#rotations[span] as number, 1, length],
-        [this.#deflections[span] as number, 0, 1],
-        [this.#rotations[span + 1] as number, -1, 0],
-        [this.#deflections[span + 1] as number, 0, -1],
-      ] as const;
-      for (const [column, a, b] of columns) {
-        const shear = shearA * a + shearB * b;
-        const moment = momentA * a + momentB * b;
-        add(this.#rotations[span] as number, column, moment);
-        add(this.#deflections[span] as number, column, shear);
-        add(this.#rotations[span + 1] as number, column, -(moment + shear * length));
-        add(this.#deflections[span + 1] as number, column, -shear);
-      }
-    });
-    return factorise(matrix, n);
-  }
-
-  solve(loads: readonly BeamLoad[]): AnalysisOutcome {
-    const nodes = this.#nodes;
-    const problems = loadProblems(loads, nodes[nodes.length - 1] as number);
-    if (problems.length) return { ok: false, problems };
-    const placed = placeLoads(nodes, loads);
-    const breaks = placed.spans.map((span, i) => breaksOf(span, this.#beam.spans[i] as number));
-    const shear = this.#beam.GA === undefined ? 0 : this.#beam.EI / this.#beam.GA;
-    // With EI = 1 throughout, displacements carry the factor EI.
-    const alone = placed.spans.map(
-      (span, i) => integrateSpan(span, breaks[i] as number[], atRest, 1, shear).end,
+function solveFrame(frame: Frame, loads: readonly BeamLoad[]): AnalysisOutcome {
+  const { restraints, nodes, spans, flexibility, shearFlexibility } = frame;
+  const total = nodes[nodes.length - 1] as number;
+  const problems = loadProblems(loads, total);
+  if (problems.length) return { ok: false, problems };
+  const placed = placeLoads(nodes, loads);
+  const alone = spans.map(({ length }, i) =>
+    carriedByLoads(placed.spans[i] as SpanLoads, length, shearFlexibility),
+  );
+  const ends = endMoments(frame, placed, alone);
+  const course: Course = { shear: [], moment: [], rotation: [], deflection: [] };
+  const reactions = Array.from(placed.nodeForces);
+  const fixingMoments = restraints.map((restraint, i) =>
+    restraint === 'fixed' ? 0 - (placed.nodeCouples[i] as number) : 0,
+  );
+  let sound = true;
+  for (let i = 0; i < spans.length; i += 1) {
+    const own = placed.spans[i] as SpanLoads;
+    const start = startOf(frame, placed, alone, ends, i);
+    const end = integrateSpan(
+      course,
+      own,
+      breaksOf(own, (spans[i] as SpanStiffness).length, total * SAME_PLACE),
+      start,
+      nodes[i] as number,
+      nodes[i + 1] as number,
+      flexibility,
+      shearFlexibility,
     );
-    const unknown = this.#displacements(placed, alone);
-    const stretches: Stretch[][] = [];
-    const ends: SectionState[] = [];
-    const starts: SectionState[] = [];
-    placed.spans.forEach((span, i) => {
-      const start = this.#startOf(i, unknown, alone[i] as Particular);
-      const run = integrateSpan(span, breaks[i] as number[], start, 1, shear);
-      starts.push(start);
-      ends.push(run.end);
-      stretches.push(run.stretches);
-    });
-    const effects = this.#effects(placed, stretches, starts, ends);
-    return isFinite(effects)
-      ? { ok: true, effects }
-      : {
-          ok: false,
-          problems: [{ code: 'bad-load', message: 'The loads are too large to calculate with.' }],
-        };
+    reactions[i] = (reactions[i] as number) + start.shear;
+    reactions[i + 1] = (reactions[i + 1] as number) - end.shear;
+    if (restraints[i] === 'fixed') fixingMoments[i] = (fixingMoments[i] as number) + start.moment;
+    if (restraints[i + 1] === 'fixed') fixingMoments[i + 1] = (fixingMoments[i + 1] as number) - end.moment;
+    sound &&= isSound(start, flexibility) && isSound(end, flexibility);
   }
+  for (let i = 0; i < reactions.length; i += 1) {
+    if (restraints[i] === 'free') reactions[i] = 0;
+    sound &&= Number.isFinite(reactions[i]) && Number.isFinite(fixingMoments[i]);
+  }
+  if (sound) return { ok: true, effects: { ...course, reactions, fixingMoments } };
+  const message = 'The loads and the stiffness of the member are too large or too small to calculate with.';
+  return { ok: false, problems: [{ code: 'bad-load', message }] };
+}
 
-  #displacements({ nodeForces, nodeCouples }: PlacedLoads, alone: readonly Particular[]): Float64Array {
-    const rhs = new Float64Array(this.#unknowns);
-    const add = (row: number, value: number) => {
-      if (row >= 0) rhs[row] = (rhs[row] as number) + value;
-    };
-    nodeForces.forEach((force, node) => add(this.#deflections[node] as number, -force));
-    nodeCouples.forEach((couple, node) => add(this.#rotations[node] as number, couple));
-    this.#rules.forEach((rule, span) => {
-      const loads = alone[span] as Particular;
-      const { shear, moment } = endForces(rule, loads.rotation, loads.deflection);
-      add(this.#rotations[span] as number, -moment);
-      add(this.#deflections[span] as number, -shear);
-      add(this.#rotations[span + 1] as number, moment + shear * rule.length + loads.moment);
-      add(this.#deflections[span + 1] as number, shear + loads.shear);
-    });
-    return this.#factorised?.solve(rhs) ?? rhs;
-  }
-
-  #startOf(span: number, unknown: Float64Array, alone: Particular): SectionState {
-    const at = (index: number) => (index < 0 ? 0 : (unknown[index] as number));
-    const rule = this.#rules[span] as SpanRule;
-    const rotation = at(this.#rotations[span] as number);
-    const deflection = at(this.#deflections[span] as number);
-    const a = rotation - at(this.#rotations[span + 1] as number) + alone.rotation;
-    const b =
-      deflection + rotation * rule.length - at(this.#deflections[span + 1] as number) + alone.deflection;
-    return { ...endForces(rule, a, b), rotation, deflection };
-  }
-
-  #effects(
-    { nodeForces, nodeCouples }: PlacedLoads,
-    stretches: readonly (readonly Stretch[])[],
-    starts: readonly SectionState[],
-    ends: readonly SectionState[],
-  ): Effects {
-    const { restraints, EI } = this.#beam;
-    const pieces = (key: 'shear' | 'moment' | 'rotation' | 'deflection', scale: number): Piece[] =>
-      stretches.flatMap((span, i) =>
-        span.map((stretch) => ({
-          from: (this.#nodes[i] as number) + stretch.from,
-          to:
-            stretch === span[span.length - 1]
-              ? (this.#nodes[i + 1] as number)
-              : (this.#nodes[i] as number) + stretch.to,
-          coefficients: scale === 1 ? stretch[key] : stretch[key].map((c) => c * scale),
-        })),
-      );
-    const reactions = restraints.map((restraint, node) =>
-      restraint === 'free'
-        ? 0
-        : (starts[node]?.shear ?? 0) - (ends[node - 1]?.shear ?? 0) + (nodeForces[node] as number),
-    );
-    const fixingMoments = restraints.map((restraint, node) =>
-      restraint === 'fixed'
-        ? (starts[node]?.moment ?? 0) - (ends[node - 1]?.moment ?? 0) - (nodeCouples[node] as number)
-        : 0,
-    );
-    return {
-      shear: pieces('shear', 1),
-      moment: pieces('moment', 1),
-      rotation: pieces('rotation', 1 / EI),
-      deflection: pieces('deflection', 1 / EI),
-      reactions,
-      fixingMoments,
-    };
-  }
+/** Sagging moments at both ends of each span, and the rotation of each support. */
+interface EndMoments {
+  left: Float64Array;
+  right: Float64Array;
+  rotations: Float64Array;
 }
 
 /**
- * The two end conditions of a span, solved for the shear and moment at its left end:
- * M₀ L + V₀ L²/2 = A and M₀ L²/2 + V₀ (L³/6 − L EI/GA) = B.
+ * Equilibrium of moments at each support that is free to turn gives the rotations, these the end moments.
+ * Where statics give a moment it is taken from there, free of the rounding of the solution.
  */
-function spanRule(length: number, shear: number): SpanRule {
-  const half = (length * length) / 2;
-  const third = length ** 3 / 6 - length * shear;
-  const determinant = length * third - half * half;
-  return {
-    length,
-    shearA: -half / determinant,
-    shearB: length / determinant,
-    momentA: third / determinant,
-    momentB: -half / determinant,
-  };
+function endMoments(frame: Frame, placed: PlacedLoads, alone: readonly Section[]): EndMoments {
+  const { restraints, spans } = frame;
+  const count = spans.length;
+  const left = new Float64Array(count);
+  const right = new Float64Array(count);
+  const rotations = Float64Array.from(placed.nodeCouples);
+  for (let i = 0; i < count; i += 1) {
+    const span = spans[i] as SpanStiffness;
+    const loads = alone[i] as Section;
+    if (restraints[i] === 'free') {
+      left[i] = placed.nodeCouples[0] as number;
+      right[i] = loads.moment + (left[i] as number) - (placed.nodeForces[0] as number) * span.length;
+    } else if (restraints[i + 1] === 'free') {
+      right[i] = 0 - (placed.nodeCouples[i + 1] as number);
+      left[i] =
+        (right[i] as number) -
+        loads.moment -
+        ((placed.nodeForces[i + 1] as number) - loads.shear) * span.length;
+    } else {
+      const fixed = fixedEndMoments(span, loads);
+      left[i] = fixed.left;
+      right[i] = fixed.right;
+    }
+    rotations[i] = (rotations[i] as number) - (left[i] as number);
+    rotations[i + 1] = (rotations[i + 1] as number) + (right[i] as number);
+  }
+  for (let i = 0; i <= count; i += 1) if (restraints[i] !== 'pin') rotations[i] = 0;
+  frame.rotations.solve(rotations);
+  for (let i = 0; i < count; i += 1) {
+    if (restraints[i] === 'free' || restraints[i + 1] === 'free') continue;
+    const { near, far } = spans[i] as SpanStiffness;
+    const here = rotations[i] as number;
+    const there = rotations[i + 1] as number;
+    left[i] = (left[i] as number) + near * here + far * there;
+    right[i] = (right[i] as number) - far * here - near * there;
+  }
+  if (restraints[0] === 'pin') left[0] = placed.nodeCouples[0] as number;
+  if (restraints[count] === 'pin') right[count - 1] = 0 - (placed.nodeCouples[count] as number);
+  return { left, right, rotations };
 }
 
-function endForces({ shearA, shearB, momentA, momentB }: SpanRule, a: number, b: number) {
-  return { shear: shearA * a + shearB * b, moment: momentA * a + momentB * b };
+/** State at the left end of a span: at a support known, at a free end found back from the support. */
+function startOf(
+  { restraints, spans, shearFlexibility }: Frame,
+  placed: PlacedLoads,
+  alone: readonly Section[],
+  { left, right, rotations }: EndMoments,
+  i: number,
+): Section {
+  const { length } = spans[i] as SpanStiffness;
+  const loads = alone[i] as Section;
+  const moment = left[i] as number;
+  if (restraints[i] === 'free') {
+    const shear = 0 - (placed.nodeForces[i] as number);
+    const rotation = (rotations[i + 1] as number) + length * (moment + (shear * length) / 2) - loads.rotation;
+    const deflection =
+      length * (-rotation - shear * shearFlexibility + length * (moment / 2 + (shear * length) / 6)) -
+      loads.deflection;
+    return { shear, moment, rotation, deflection };
+  }
+  const shear =
+    restraints[i + 1] === 'free'
+      ? (placed.nodeForces[i + 1] as number) - loads.shear
+      : ((right[i] as number) - moment - loads.moment) / length;
+  return { shear, moment, rotation: rotations[i] as number, deflection: 0 };
 }
 
-function isFinite({ shear, deflection, reactions }: Effects): boolean {
+function isSound({ shear, moment, rotation, deflection }: Section, flexibility: number): boolean {
   return (
-    reactions.every(Number.isFinite) &&
-    shear.every(({ coefficients }) => coefficients.every(Number.isFinite)) &&
-    deflection.every(({ coefficients }) => coefficients.every(Number.isFinite))
+    Number.isFinite(shear) &&
+    Number.isFinite(moment) &&
+    Number.isFinite(rotation * flexibility) &&
+    Number.isFinite(deflection * flexibility)
   );
 }

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { peaks, piecesBetween } from '#shared/analysis/peaks.ts';
-import { valueAt } from '#shared/analysis/polynomial.ts';
+import { peaks } from '#shared/analysis/peaks.ts';
+import { piecesBetween, valueAt } from '#shared/analysis/pieces.ts';
 import { solve } from '#shared/analysis/solve.ts';
 import type { BeamLoad, Effects, Restraint } from '#shared/analysis/types.ts';
 import data from './data/beam-formulas.json' with { type: 'json' };
