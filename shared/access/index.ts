@@ -1,0 +1,3 @@
+export * from './can.ts';
+export * from './roles.ts';
+export * from './rules.ts';

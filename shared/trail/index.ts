@@ -1,0 +1,2 @@
+export * from './events.ts';
+export * from './say.ts';
