@@ -31,7 +31,7 @@ export function solveDensely(beam: Beam, loads: readonly BeamLoad[]) {
     const { q0, q1 } = segments[segment] as Segment;
     const [v, m, r, w] = [0, 1, 2, 3].map((i) => 4 * segment + i) as [number, number, number, number];
     const terms = new Map<number, number>();
-    let known = 0;
+    let known: number;
     if (key === 'shear') {
       terms.set(v, 1);
       known = -q0 * t - (q1 * t ** 2) / 2;

@@ -448,6 +448,33 @@ export function testEdition(change: Partial<Edition> = {}): Edition {
         ],
       },
       quantity('ratio', 'Depth to breadth', '1', 'h / b'),
+      quantity('r_m', 'Share of the moment that comes and goes', '1', 'M > 0 ? M_variable / M : 0'),
+      {
+        id: 'volume',
+        symbol: 'K_v',
+        title: 'Length factor',
+        reference: '2.12',
+        kind: 'factor',
+        unit: '1',
+        empirical: true,
+        cases: [
+          {
+            id: 'all',
+            gives: { kind: 'formula', formula: 'min(1, (3000 / max(1, L_0))^0.05) * (1 - r_m / 1000)' },
+            provenance: invented,
+          },
+        ],
+      },
+      {
+        id: 'hold-down',
+        symbol: 'R_hold',
+        title: 'Strength of the holding down',
+        reference: '7.1',
+        kind: 'limit',
+        unit: 'N',
+        cases: [{ id: 'all', gives: { kind: 'constant', value: 4000 }, provenance: invented }],
+      },
+      quantity('d_v', 'Distance of the shear from the support', 'mm', 'h'),
       {
         id: 'lateral',
         symbol: 'K_l',
@@ -492,7 +519,7 @@ export function testEdition(change: Partial<Edition> = {}): Edition {
       bendingStiffness: 'EI',
       shearStiffness: 'GA',
       selfWeight: { action: 'dead', line: 'g' },
-      shear: { at: 'distance', distance: 'h', from: 'face', pointLoads: 'keep', reference: '2.5' },
+      shear: { at: 'distance', distance: 'd_v', from: 'face', pointLoads: 'keep', reference: '2.5' },
       closeFrom: 0.9,
     },
     checks: [
@@ -505,7 +532,7 @@ export function testEdition(change: Partial<Edition> = {}): Edition {
         demand: { title: 'Bending stress', formula: 'M / W', unit: 'N/mm2' },
         limit: {
           title: 'Permissible bending stress',
-          formula: 'f_m * K_d * K_h * K_s * K_e * K_l',
+          formula: 'f_m * K_d * K_h * K_s * K_e * K_l * K_v',
           unit: 'N/mm2',
         },
       },
@@ -526,6 +553,16 @@ export function testEdition(change: Partial<Edition> = {}): Edition {
         state: 'strength',
         demand: { title: 'Bearing stress', formula: 'R / (b * l_b)', unit: 'N/mm2' },
         limit: { title: 'Permissible bearing stress', formula: 'f_p * K_d * K_s * K_e * K_b', unit: 'N/mm2' },
+      },
+      {
+        id: 'uplift',
+        title: 'Holding down',
+        reference: '7.1',
+        at: 'support',
+        state: 'strength',
+        applies: { fact: 'R_up', operator: 'greaterThan', value: 0 },
+        demand: { title: 'Uplift', formula: 'R_up', unit: 'N' },
+        limit: { title: 'Strength', formula: 'R_hold', unit: 'N' },
       },
       {
         id: 'notch',

@@ -139,7 +139,9 @@ function formOfLoad({ span, arrangement, value, kind }: Place, context: Context)
   const loads = loadsUnder(combination, arrangement, context);
   const from = geometry.nodes[span] as number;
   const to = geometry.nodes[span + 1] as number;
-  return loadForm(loads, from, to, kind !== 'moment' || value !== 0);
+  const { restraints } = context.given;
+  const free = { left: restraints[span] === 'free', right: restraints[span + 1] === 'free' };
+  return loadForm(loads, from, to, kind !== 'moment' || value !== 0, free);
 }
 
 function loadsUnder(combination: ExpandedCombination, arrangement: number, { situation }: Context) {

@@ -18,13 +18,14 @@ export function spanKind(restraints: readonly Restraint[], span: number): SpanKi
 
 /**
  * Form of the loads on a span. `uniform`: even line loads over the whole span; `point`: point loads only;
- * `mixed`: anything else; `end-moment`: no load of its own, but a moment from its ends.
+ * (one at a free end counts); `mixed`: anything else; `end-moment`: no load of its own, but a moment from its ends.
  */
 export function loadForm(
   loads: readonly BeamLoad[],
   from: number,
   to: number,
   momentInside: boolean,
+  free: { left: boolean; right: boolean } = { left: false, right: false },
 ): LoadForm {
   const tolerance = (to - from) * 1e-9;
   let uniform = false;
@@ -37,9 +38,13 @@ export function loadForm(
       const whole = load.from <= from + tolerance && load.to >= to - tolerance;
       if (whole && load.startIntensity === load.endIntensity) uniform = true;
       else other = true;
-    } else if (load.x > from + tolerance && load.x < to - tolerance) {
-      if (load.kind === 'couple') other ||= load.moment !== 0;
-      else point ||= load.force !== 0;
+    } else {
+      const inside = load.x > from + tolerance && load.x < to - tolerance;
+      const atFreeEnd =
+        (free.left && Math.abs(load.x - from) <= tolerance) ||
+        (free.right && Math.abs(load.x - to) <= tolerance);
+      if (load.kind === 'couple') other ||= inside && load.moment !== 0;
+      else point ||= (inside || atFreeEnd) && load.force !== 0;
     }
   }
   if (other || (uniform && point)) return 'mixed';
