@@ -12,9 +12,18 @@ import type { Member, Plan, Result } from './types.ts';
  */
 export function check(plan: Plan, member: Member): Result {
   const { runtime, templates } = preparedOf(plan);
-  const memberHash = hashOf(member);
+  const memberHash = hashOfMember(member);
   const outcome = stand(runtime, member, null, null, true);
   return outcome.ok
     ? resultOf(outcome.standing, plan.hash, memberHash, templates)
     : withoutVerdict(plan.edition, plan.hash, member, memberHash, outcome.findings);
+}
+
+/** A member with a number that no JSON can hold is hashed as JSON would write it, and then refused. */
+function hashOfMember(member: Member): string {
+  try {
+    return hashOf(member);
+  } catch {
+    return hashOf(JSON.parse(JSON.stringify(member)));
+  }
 }

@@ -179,7 +179,7 @@ function segmentOf(from: number, to: number, loads: readonly BeamLoad[]): Segmen
 
 function sumAt(loads: readonly BeamLoad[], kind: 'point' | 'couple', x: number): number {
   return loads.reduce((sum, load) => {
-    if (load.kind !== kind || load.kind === 'line' || Math.abs(load.x - x) > 1e-9) return sum;
+    if (load.kind === 'line' || load.kind !== kind || Math.abs(load.x - x) > 1e-9) return sum;
     return sum + (load.kind === 'point' ? load.force : load.moment);
   }, 0);
 }

@@ -101,7 +101,14 @@ function loadOf(
     case 'line':
       return { ...head, kind: 'line', start: amount };
     case 'part':
-      return { ...head, kind: 'line', start: amount, end: amount / 2, from: total * at * 0.5, to: total * at };
+      return {
+        ...head,
+        kind: 'line',
+        start: amount,
+        end: amount / 2,
+        from: total * at * 0.5,
+        to: total * at,
+      };
     case 'point':
       return { ...head, kind: 'point', force: amount, x: total * at };
     default:

@@ -68,9 +68,7 @@ describe('the ledger', () => {
 
   it('shows a decision that was changed', async () => {
     const result = check(plan, testMember());
-    const ledger = result.ledger.map((entry) =>
-      entry.symbol === 'h' ? { ...entry, value: 60 } : entry,
-    );
+    const ledger = result.ledger.map((entry) => (entry.symbol === 'h' ? { ...entry, value: 60 } : entry));
     const findings = await attest(plan, { ...result, ledger });
     expect(findings.map(({ code, clause }) => [code, clause])).toContainEqual(['decision-differs', 'depth']);
   });

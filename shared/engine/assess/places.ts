@@ -26,6 +26,9 @@ export interface Place {
   reduced: number;
 }
 
+/** Values this close are equal but for rounding. */
+const SAME = 1e-9;
+
 export const newPlace = (): Place => ({
   kind: 'moment',
   ordinal: 0,
@@ -90,32 +93,28 @@ export class PlaceVisitor {
     const { situation, place, most, least } = this;
     const count = this.superposeAll(combination, 'moment');
     for (let span = 0; span < situation.model.beam.spans.length; span += 1) {
-      let sagging = 0;
-      let hogging = 0;
-      let saggingAt = 0;
-      let hoggingAt = 0;
+      let sagging = -Infinity;
+      let hogging = Infinity;
       for (let a = 0; a < count; a += 1) {
         momentPeaks(situation.grid, this.sums[a] as Float64Array, span, most, least);
-        if (a === 0 || most.value > sagging) {
-          sagging = most.value;
-          saggingAt = a;
-        }
-        if (a === 0 || least.value < hogging) {
-          hogging = least.value;
-          hoggingAt = a;
-        }
+        sagging = Math.max(sagging, most.value);
+        hogging = Math.min(hogging, least.value);
       }
       // What rounding leaves of a zero moment is no place of its own.
-      const trace = Math.max(sagging, -hogging) * 1e-9;
+      const trace = Math.max(sagging, -hogging) * SAME;
+      const sags = sagging > trace || sagging >= -hogging;
+      const hogs = -hogging > trace;
       place.span = span;
       place.node = -1;
-      if (sagging > trace || sagging >= -hogging) {
-        momentPeaks(situation.grid, this.sums[saggingAt] as Float64Array, span, most, least);
-        this.putMoment(combination, saggingAt, most, to);
-      }
-      if (-hogging > trace) {
-        momentPeaks(situation.grid, this.sums[hoggingAt] as Float64Array, span, most, least);
-        this.putMoment(combination, hoggingAt, least, to);
+      for (let a = 0; a < count; a += 1) {
+        // Arrangements with the same moment can differ in what else counts, such as where it is zero.
+        if (count > 1) momentPeaks(situation.grid, this.sums[a] as Float64Array, span, most, least);
+        if (sags && most.value >= sagging - Math.abs(sagging) * SAME) {
+          this.putMoment(combination, a, most, to);
+        }
+        if (hogs && least.value <= hogging + Math.abs(hogging) * SAME) {
+          this.putMoment(combination, a, least, to);
+        }
       }
     }
   }

@@ -2,7 +2,7 @@ import type { Member } from '#shared/basis/schema/index.ts';
 import { expandCombinations, type ExpandedCombination } from '../combine/expand.ts';
 import { buildModel, type ActionLoads, type Model } from '../effects/model.ts';
 import { layOut, type Geometry, type SpanRule } from '../member/geometry.ts';
-import { type Given, readMember } from '../member/given.ts';
+import { type Given, LARGEST, readMember } from '../member/given.ts';
 import { inputProblems } from '../member/inputs.ts';
 import { placeLoads } from '../member/placeLoads.ts';
 import { systemFactor } from '../member/units.ts';
@@ -192,13 +192,16 @@ function stiffnessOf(
 ): { flexibility: number | null; ratio: number | null | 'needed' } {
   const { bendingStiffness, shearStiffness } = runtime.edition.analysis;
   const bending = memberValue(runtime, env, bendingStiffness);
-  const EI = bending.ok && bending.value > 0 ? bending.value : null;
+  const EI = bending.ok && isStiffness(bending.value) ? bending.value : null;
   if (shearStiffness === undefined) return { flexibility: EI && 1 / EI, ratio: null };
   const shear = memberValue(runtime, env, shearStiffness);
-  const GA = shear.ok && shear.value > 0 ? shear.value : null;
+  const GA = shear.ok && isStiffness(shear.value) ? shear.value : null;
   if (EI !== null && GA !== null) return { flexibility: 1 / EI, ratio: GA / EI };
   return { flexibility: null, ratio: isDeterminate(given) ? null : 'needed' };
 }
+
+/** A stiffness that can be calculated with. */
+const isStiffness = (value: number) => value > 1 / LARGEST && value < LARGEST ** 2;
 
 /** Whether statics alone give the moments: as many held movements as there are equations. */
 function isDeterminate({ restraints }: Given): boolean {
@@ -252,8 +255,8 @@ function selfWeightOf(
   if (!selfWeight) return { ok: true, selfWeight: null };
   const action = runtime.edition.actions.findIndex(({ id }) => id === selfWeight.action);
   const line = memberValue(runtime, env, selfWeight.line);
-  if (!line.ok || action < 0) {
-    const message = line.ok ? 'The action of the self-weight is missing.' : line.problem.message;
+  if (!line.ok || action < 0 || !(Math.abs(line.value) <= LARGEST)) {
+    const message = line.ok ? 'The self-weight has no sensible size.' : line.problem.message;
     return { ok: false, findings: [finding('no-self-weight', '/grade', message)] };
   }
   return { ok: true, selfWeight: { action, line: line.value } };

@@ -38,8 +38,8 @@ export interface Given {
 
 export type Reading = { ok: true; given: Given } | { ok: false; findings: Finding[] };
 
-/** No load of a building is larger than this, in newtons or pounds and millimetres or inches. */
-const LARGEST = 1e12;
+/** No size, load or self-weight of a building comes near this, in any of the units. */
+export const LARGEST = 1e12;
 
 /** Reads a member; everything that can be wrong with it by itself is found here, each at its place. */
 export function readMember(edition: Edition, member: Member): Reading {
@@ -118,7 +118,7 @@ export function readMember(edition: Edition, member: Member): Reading {
 type Find = (code: string, pointer: string, message: string) => void;
 
 const isSize = (value: number | undefined): value is number =>
-  value !== undefined && value > 0 && value <= LARGEST;
+  value !== undefined && value >= 1 / LARGEST && value <= LARGEST;
 const isAmount = (value: number | undefined): value is number =>
   value !== undefined && Math.abs(value) <= LARGEST;
 
