@@ -113,7 +113,7 @@ function LineBand({
         x={x1}
         y={bottom - height(load.end) - 6}
         textAnchor="end"
-        className="fill-ink-soft stroke-none text-xs"
+        className="fill-soft stroke-none text-xs"
       >
         {load.label}
       </text>

@@ -144,7 +144,7 @@ export function MemberStrip(props: MemberStripProps) {
         );
         return (
           <g key={of}>
-            <text x={8} y={y(0) + 4} className="fill-ink-soft font-serif italic text-sm" aria-hidden>
+            <text x={8} y={y(0) + 4} className="fill-soft font-serif italic text-sm" aria-hidden>
               {of}
               <title>{name}</title>
             </text>

@@ -18,7 +18,7 @@ export function GridHead({ columns }: { columns: readonly GridColumn[] }) {
           >
             <span className="text-ink">{column.title}</span>
             {(column.symbol ?? column.unit) && (
-              <span className="font-mono text-[0.6875rem] text-ink-soft">
+              <span className="font-mono text-[0.6875rem] text-soft">
                 {[column.symbol, column.unit].filter(Boolean).join(' ')}
               </span>
             )}
