@@ -10,6 +10,7 @@ import {
   line,
   member,
   points,
+  proofsOf,
   rowsFor,
   run,
   starter,
@@ -332,5 +333,76 @@ describe('stability of the starter edition', () => {
     });
     expect(checkOf(r, 'notch')).toMatchObject({ word: 'fails' });
     expect(r.verdict.word).toBe('fails');
+  });
+});
+
+describe('factors of the starter edition', () => {
+  const changed = (change: Partial<Member>) => run(edition, { ...joist, ...change });
+
+  it('takes the capacity factor by grade and importance', () => {
+    const phi = (grade: string, category: string) =>
+      behind(changed({ grade, choices: { ...joist.choices, category } }), 'bending', 'phi');
+    expect(['category-1', 'category-2', 'category-3'].map((c) => phi('MGP10', c))).toEqual([0.9, 0.7, 0.6]);
+    expect(['category-1', 'category-2', 'category-3'].map((c) => phi('MGP15', c))).toEqual([
+      0.95, 0.85, 0.75,
+    ]);
+    expect(phi('F17-seasoned', 'category-2')).toBe(0.85);
+    expect(phi('F14-seasoned', 'category-2')).toBe(0.7);
+  });
+
+  it('takes partial seasoning by the least dimension, and moisture of the place for seasoned timber', () => {
+    const k4 = (grade: string, b: number, EMC = 12) =>
+      behind(
+        changed({ grade, section: { b, h: 140, pieces: 1 }, inputs: { n_mem: 5, EMC } }),
+        'bending',
+        'k_4',
+      );
+    expect([38, 45, 50, 75, 100, 125].map((b) => k4('F14-unseasoned', b))).toEqual([
+      1.15, 1.1, 1.1, 1.05, 1, 1,
+    ]);
+    expect([12, 15, 20, 25, 30].map((emc) => k4('MGP10', 45, emc))).toEqual([1, 1, 0.85, 0.7, 0.7]);
+  });
+
+  it('does not let load sharing fall below 1', () => {
+    const wide = changed({ carries: { by: 'spacing', width: 2400 } });
+    expect(behind(wide, 'bending', 'k_9')).toBe(1);
+  });
+
+  it('raises the strength of a short bearing away from the end only', () => {
+    const two = changed({
+      spans: [{ length: 2400 }, { length: 2400 }],
+      supports: [35, 50, 35].map((bearing) => ({ restraint: 'pin', bearing })),
+    });
+    expect(behind(two, 'bearing', 'k_7')).toBe(1.2);
+    expect(behind(changed({}), 'bearing', 'k_7')).toBe(1);
+  });
+
+  it('lets creep grow with the logarithm of time and with moisture', () => {
+    const j2 = (grade: string, t_load: number) =>
+      behind(changed({ grade, inputs: { n_mem: 5, t_load } }), 'deflection-long', 'j_2');
+    expect(j2('MGP10', 1)).toBe(1);
+    expect(j2('MGP10', 18_250)).toBe(2);
+    expect(j2('F14-unseasoned', 18_250)).toBe(3);
+    expect(j2('MGP10', Math.sqrt(365))).toBeCloseTo(1.5, 9);
+  });
+
+  it('takes 0.9 for temperature on the tropical coast, for seasoned timber', () => {
+    const k6 = (grade: string) =>
+      behind(changed({ grade, choices: { ...joist.choices, region: 'tropical' } }), 'bending', 'k_6');
+    expect([k6('MGP10'), k6('F14-unseasoned')]).toEqual([0.9, 1]);
+  });
+
+  it('can take the share of temporary action as it is in the combination', () => {
+    const choices = { ...joist.choices, share_rule: 'actual' };
+    const share = (loads: Member['loads']) => behind(changed({ choices, loads }), 'bending', 'r');
+    expect(share(joist.loads)).toBeCloseTo((1.5 * 1.5) / (1.2 * 0.4 + 1.5 * 1.5), 9);
+    expect(share([line('G', 0.18)])).toBe(0.25);
+  });
+});
+
+describe('proofs of the starter edition', () => {
+  it.each(proofsOf(edition))('$title', ({ problems, lines }) => {
+    expect(problems).toEqual([]);
+    expect(lines.filter(({ holds }) => !holds)).toEqual([]);
   });
 });

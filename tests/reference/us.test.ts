@@ -9,6 +9,7 @@ import {
   line,
   member,
   points,
+  proofsOf,
   rowsFor,
   run,
   setCase,
@@ -725,5 +726,119 @@ describe('guards of the starter edition', () => {
       beam(3.5, { ...us01, spans: [{ length: 96 }, { length: 96 }], loads: [line('L', 300)] }),
     );
     expect(behind(r, 'bending', 'C_L')).toBeLessThan(1);
+  });
+
+  it('lowers strength and stiffness for incising, temperature and wet service together', () => {
+    const r = run(
+      edition,
+      beam(3.5, {
+        ...us01,
+        choices: { ...us01.choices, moisture: 'wet', temperature: 'to-150', incised: 'yes' },
+      }),
+    );
+    expect(limit(r, 'bending')).toBeCloseTo(1000 * 1.25 * 0.85 * 0.5 * 1.3 * 0.8, 9);
+    expect(limit(r, 'shear')).toBeCloseTo(180 * 1.25 * 0.97 * 0.5 * 0.8, 9);
+    expect(limit(r, 'bearing')).toBeCloseTo(625 * 0.67 * 0.5, 9);
+    expect(behind(r, 'deflection-total', 'E_adj')).toBeCloseTo(1.7e6 * 0.9 * 0.9 * 0.95, 3);
+  });
+
+  it('looks at nominal proportions where that rule is chosen', () => {
+    const held = (held_by: string) =>
+      run(
+        edition,
+        beam(1.5, {
+          grade: 'DFL-No.2',
+          choices: { use: 'floor', stability: 'proportions', held_by },
+          section: { b: 1.5, h: 9.25, pieces: 1, nominal: { b: 2, h: 10 } },
+          spans: [{ length: 120 }],
+          loads: [line('L', 40)],
+        }),
+      );
+    expect(utilisation(held('nothing'), 'proportions')).toBe(5 / 2);
+    expect(checkOf(held('ends'), 'proportions').word).toBe('fails');
+    expect(utilisation(held('edge'), 'proportions')).toBe(1);
+    expect(behind(held('edge'), 'bending', 'C_L')).toBe(1);
+  });
+
+  it('raises the bearing value of a short bearing away from the end only', () => {
+    const r = run(
+      edition,
+      beam(3, { ...us01, spans: [{ length: 96 }, { length: 96 }], loads: [line('L', 300)] }),
+    );
+    expect(behind(r, 'bearing', 'C_b')).toBeCloseTo(3.375 / 3, 12);
+    expect(behind(run(edition, beam(3, us01)), 'bearing', 'C_b')).toBe(1);
+  });
+
+  it('takes the Southern Pine value of the width', () => {
+    const value = (h: number) =>
+      limit(
+        run(
+          edition,
+          beam(1.5, {
+            grade: 'SP-No.2',
+            choices: { use: 'floor', top_edge: 'length' },
+            section: { b: 1.5, h, pieces: 1 },
+            spans: [{ length: 96 }],
+            loads: [line('L', 20)],
+          }),
+        ),
+        'bending',
+      );
+    expect([3.5, 5.5, 7.25, 9.25, 11.25].map(value)).toEqual([1100, 1000, 925, 800, 750]);
+    expect(value(13.25)).toBeCloseTo(675, 9);
+  });
+});
+
+describe('the same member in metric units', () => {
+  const newtons = 4.4482216152605;
+  const metric = (given: Member): Member => ({
+    ...given,
+    units: 'metric',
+    section: { b: given.section.b * 25.4, h: given.section.h * 25.4, pieces: given.section.pieces },
+    spans: given.spans.map(({ length, inputs }) => ({
+      length: length * 25.4,
+      ...(inputs
+        ? { inputs: Object.fromEntries(Object.entries(inputs).map(([k, v]) => [k, v * 25.4])) }
+        : {}),
+    })),
+    supports: given.supports.map((support) => ({
+      ...support,
+      ...(support.bearing ? { bearing: support.bearing * 25.4 } : {}),
+    })),
+    ...(given.carries ? { carries: { ...given.carries, width: given.carries.width * 25.4 } } : {}),
+    loads: given.loads.map((load) => {
+      if (load.kind === 'line') return { ...load, start: (load.start * newtons) / 304.8 };
+      if (load.kind === 'area') return { ...load, intensity: (load.intensity * newtons) / 304.8 / 0.3048 };
+      if (load.kind === 'point') return { ...load, force: (load.force * newtons) / 1000, x: load.x * 25.4 };
+      return load;
+    }),
+  });
+  it.each<[string, Member]>([
+    ['us-01', beam(3.5, us01)],
+    ['us-05', beam(5, us05)],
+    ['us-15', us15b],
+    ['us-18', us18],
+    [
+      'us-06',
+      beam(5, {
+        ...us05,
+        choices: { use: 'roof-plaster', top_edge: 'points' },
+        spans: [{ length: 240, inputs: { l_u_top: 120 } }],
+      }),
+    ],
+  ])('%s has the same utilisation in every check', (_, given) => {
+    const printed = run(edition, given);
+    const converted = run(edition, metric(given));
+    expect(converted.checks.map(({ id }) => id)).toEqual(printed.checks.map(({ id }) => id));
+    for (const [i, { utilisation: u }] of printed.checks.entries()) {
+      expect(converted.checks[i]?.utilisation).toBeCloseTo(u ?? NaN, 10);
+    }
+  });
+});
+
+describe('proofs of the starter edition', () => {
+  it.each(proofsOf(edition))('$title', ({ problems, lines }) => {
+    expect(problems).toEqual([]);
+    expect(lines.filter(({ holds }) => !holds)).toEqual([]);
   });
 });

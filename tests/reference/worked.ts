@@ -1,6 +1,6 @@
 import { readFileSync } from 'node:fs';
 import type { Edition, LoadInput, Member, Outcome, Provenance } from '#shared/basis/schema/index.ts';
-import { check, compile } from '#shared/engine/index.ts';
+import { check, compile, runProofs, type ProofResult } from '#shared/engine/index.ts';
 import type { CheckResult, LedgerEntry, Result } from '#shared/engine/types.ts';
 
 /*
@@ -98,6 +98,13 @@ export function run(edition: Edition, given: Member): Result {
     throw new Error(outcome.findings.map((f) => `${f.pointer} ${f.message}`).join('\n'));
   }
   return check(outcome.plan, given);
+}
+
+/** The proofs of an edition, run. */
+export function proofsOf(edition: Edition): ProofResult[] {
+  const outcome = compile(edition);
+  if (!outcome.ok) throw new Error(outcome.findings.map((f) => `${f.pointer} ${f.message}`).join('\n'));
+  return runProofs(outcome.plan);
 }
 
 /** A check of a result, by id. */
