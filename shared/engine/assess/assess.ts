@@ -56,10 +56,9 @@ export function assess(
       const combination = combinations[c] as ExpandedCombination;
       atCombination(runtime, env, context, combination);
       for (const kind of kinds) {
-        const here = assessments.filter(
-          ({ check }) => check.kind === kind && check.state === combination.state,
-        );
-        if (here.length === 0) continue;
+        const indices = runtime.checksAt.get(`${combination.state}@${kind}`);
+        if (!indices) continue;
+        const here = indices.map((index) => assessments[index] as Assessment);
         if (combination.problem) {
           for (const assessment of here) note(assessment, combination.problem, c, null);
           continue;

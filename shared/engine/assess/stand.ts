@@ -1,5 +1,5 @@
 import type { Member } from '#shared/basis/schema/index.ts';
-import { expandCombinations, type ExpandedCombination } from '../combine/expand.ts';
+import type { ExpandedCombination } from '../combine/expand.ts';
 import { buildModel, type ActionLoads, type Model } from '../effects/model.ts';
 import { layOut, type Geometry, type SpanRule } from '../member/geometry.ts';
 import { type Given, LARGEST, readMember } from '../member/given.ts';
@@ -80,7 +80,7 @@ export function stand(
     given.bearings,
   );
 
-  const expansion = expandCombinations(
+  const expansion = runtime.expansions.expand(
     edition,
     context.situation.actions.map(({ action }) => action),
     (pattern, term, action) => factorAt(runtime, env, context, pattern, term, action),
@@ -235,7 +235,9 @@ function analyse(
   if (!built.ok) {
     return {
       ok: false,
-      findings: built.problems.map(({ code, message }) => finding(code, '/spans', message)),
+      findings: built.problems.map(({ code, message }) =>
+        finding(code, code === 'mechanism' || code === 'bad-restraints' ? '/supports' : '/spans', message),
+      ),
     };
   }
   if (memo) {

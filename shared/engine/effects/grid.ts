@@ -26,28 +26,33 @@ export interface Grid {
 
 /** Brings the effects of several cases onto common pieces. Nodes are the places of the supports. */
 export function toGrid(nodes: readonly number[], effects: readonly Effects[]): Grid {
-  const total = nodes[nodes.length - 1] as number;
-  const tolerance = total * 1e-12;
-  const places = [...nodes];
-  for (const { shear, moment, deflection } of effects) {
-    for (const pieces of [shear, moment, deflection]) {
-      for (const { from } of pieces) places.push(from);
-    }
-  }
-  places.sort((a, b) => a - b);
-  const isNode = (x: number) => nodes.some((node) => Math.abs(node - x) <= tolerance);
-  const kept: number[] = [];
-  for (const x of places) {
-    const last = kept[kept.length - 1];
-    if (last === undefined || x - last > tolerance) kept.push(isNode(x) ? nearest(nodes, x) : x);
-  }
-  const breaks = Float64Array.from(kept);
-  const firstOfSpan = Int32Array.from(nodes, (node) => breaks.indexOf(node));
+  const kept = breaksOf(nodes, effects);
+  const breaks = new Float64Array(kept.length);
+  for (let i = 0; i < kept.length; i += 1) breaks[i] = kept[i] as number;
+  const firstOfSpan = new Int32Array(nodes.length);
+  for (let i = 0; i < nodes.length; i += 1) firstOfSpan[i] = kept.indexOf(nodes[i] as number);
   return { breaks, firstOfSpan, cases: effects.map((each) => gridCase(breaks, each)) };
 }
 
-function nearest(nodes: readonly number[], x: number): number {
-  return nodes.reduce((best, node) => (Math.abs(node - x) < Math.abs(best - x) ? node : best));
+/** Every boundary of a piece in any case, once each; those that fall on a node are the node's place. */
+function breaksOf(nodes: readonly number[], effects: readonly Effects[]): readonly number[] {
+  const spans = nodes.length - 1;
+  if (effects.every(({ moment }) => moment.length === spans)) return nodes;
+  const tolerance = (nodes[spans] as number) * 1e-12;
+  const places = [...nodes];
+  for (const { moment } of effects) for (const { from } of moment) places.push(from);
+  places.sort((a, b) => a - b);
+  const kept: number[] = [];
+  for (const x of places) {
+    const last = kept[kept.length - 1];
+    if (last === undefined || x - last > tolerance) kept.push(onNode(nodes, x, tolerance));
+  }
+  return kept;
+}
+
+function onNode(nodes: readonly number[], x: number, tolerance: number): number {
+  for (const node of nodes) if (Math.abs(node - x) <= tolerance) return node;
+  return x;
 }
 
 function gridCase(breaks: Float64Array, { shear, moment, deflection, reactions }: Effects): GridCase {

@@ -19,6 +19,10 @@ const written: Record<UnitSystem, Record<keyof UnitFactors, string>> = {
 
 /** Multipliers for a member document in `from` checked to an edition in `to`. */
 export function unitFactors(from: UnitSystem, to: UnitSystem): UnitFactors {
+  return factors[from][to];
+}
+
+function factorsFor(from: UnitSystem, to: UnitSystem): UnitFactors {
   const units = written[from];
   return {
     length: factorOf(units.length, to),
@@ -40,3 +44,9 @@ export function systemFactor(from: UnitSystem, to: UnitSystem, dimension: Dimens
   if (from === to) return 1;
   return coherentFactor({ symbol: '', system: from, dimension, factor: 1 }, to);
 }
+
+const systems = ['metric', 'inch-pound'] as const;
+
+const factors = Object.fromEntries(
+  systems.map((from) => [from, Object.fromEntries(systems.map((to) => [to, factorsFor(from, to)]))]),
+) as Record<UnitSystem, Record<UnitSystem, UnitFactors>>;

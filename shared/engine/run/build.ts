@@ -10,6 +10,7 @@ import type {
 } from '#shared/basis/compile/plan.ts';
 import type { Condition } from '#shared/basis/schema/index.ts';
 import { pure } from '#shared/units/units.ts';
+import { ExpansionMemo } from '../combine/memo.ts';
 import { compileCondition, factsOf } from '../decide/compileCondition.ts';
 import { inputAt } from '../member/inputs.ts';
 import { factorOf } from '../member/units.ts';
@@ -37,6 +38,7 @@ export function buildRuntime(plan: CompiledEdition): Runtime {
     return slot;
   });
   const clauses = plan.clauses.map((clause) => ready.clause(clause));
+  const checks = plan.checks.map((check) => ready.check(check, edition.checks[check.index]));
   const context: Runtime['context'] = { current: null };
   const runtime: Omit<Runtime, 'env'> = {
     edition,
@@ -44,7 +46,9 @@ export function buildRuntime(plan: CompiledEdition): Runtime {
     slotOf: slots,
     clauses,
     clauseAt: new Map(clauses.map((run) => [run.slot, run])),
-    checks: plan.checks.map((check) => ready.check(check, edition.checks[check.index])),
+    checks,
+    checksAt: byStateAndKind(checks),
+    expansions: new ExpansionMemo(),
     factors: plan.factors.map((terms) => terms.map((factor) => ready.formula(factor))),
     belowMember: slotsAt(symbols, ['combination', 'term', 'place']),
     atPlace: slotsAt(symbols, ['place']),
@@ -58,6 +62,17 @@ export function buildRuntime(plan: CompiledEdition): Runtime {
   const fillers = symbols.map((symbol) => fillerOf(symbol, () => whole, context));
   const whole: Runtime = { ...runtime, env: new Env(fillers) };
   return whole;
+}
+
+function byStateAndKind(checks: readonly RunCheck[]): Map<string, number[]> {
+  const found = new Map<string, number[]>();
+  checks.forEach(({ kind, state }, i) => {
+    const key = `${state ?? ''}@${kind}`;
+    const known = found.get(key);
+    if (known) known.push(i);
+    else found.set(key, [i]);
+  });
+  return found;
 }
 
 function slotsAt(symbols: readonly RunSymbol[], levels: readonly RunSymbol['level'][]): Int32Array {

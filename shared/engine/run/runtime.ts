@@ -1,5 +1,6 @@
 import type { Edition } from '#shared/basis/schema/index.ts';
 import type { Level } from '#shared/basis/facts.ts';
+import type { ExpansionMemo } from '../combine/memo.ts';
 import type { ConditionTest } from '../decide/compileCondition.ts';
 import type { RunClause } from './clause.ts';
 import type { Dimension } from '#shared/units/units.ts';
@@ -38,6 +39,8 @@ export interface Runtime {
   clauses: readonly RunClause[];
   clauseAt: ReadonlyMap<number, RunClause>;
   checks: readonly RunCheck[];
+  /** Positions in `checks` by state and kind of place, as "strength@moment". */
+  checksAt: ReadonlyMap<string, readonly number[]>;
   /** Factors of combination patterns, by pattern and term. */
   factors: readonly (readonly FormulaRun[])[];
   /** Slots to empty when the combination changes: everything narrower than the member. */
@@ -46,6 +49,8 @@ export interface Runtime {
   atPlace: Int32Array;
   atTerm: Int32Array;
   env: Env;
+  /** Combinations written out before, by the actions carried and the factors on them. */
+  expansions: ExpansionMemo;
   /** Where the evaluation stands; the slots' fillers read it. */
   context: { current: Context | null };
   /** Dimension of a symbol. */
