@@ -11,11 +11,11 @@ import type { Member, Plan, Result } from './types.ts';
  * Numbers of the result are in the edition's coherent units (mm, N, N/mm2; in, lbf, psi).
  */
 export function check(plan: Plan, member: Member): Result {
-  const { runtime, templates } = preparedOf(plan);
+  const { runtime, stationery } = preparedOf(plan);
   const memberHash = hashOfMember(member);
   const outcome = stand(runtime, member, null, null, true);
   return outcome.ok
-    ? resultOf(outcome.standing, plan.hash, memberHash, templates)
+    ? resultOf(outcome.standing, plan.hash, memberHash, stationery)
     : withoutVerdict(plan.edition, plan.hash, member, memberHash, outcome.findings);
 }
 

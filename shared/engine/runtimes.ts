@@ -1,13 +1,13 @@
 import { buildRuntime } from './run/build.ts';
 import type { Runtime } from './run/runtime.ts';
-import type { Template } from './ledger/substitute.ts';
+import type { Stationery } from './ledger/recorder.ts';
+import { Standings } from './ledger/standing.ts';
 import type { Plan } from './types.ts';
 
 /** What is made of a plan once and used for all its members. */
 export interface Prepared {
   runtime: Runtime;
-  /** Formulas cut at their symbols, for the ledger. */
-  templates: Map<string, Template>;
+  stationery: Stationery;
 }
 
 const prepared = new WeakMap<Plan, Prepared>();
@@ -16,7 +16,8 @@ const prepared = new WeakMap<Plan, Prepared>();
 export function preparedOf(plan: Plan): Prepared {
   const known = prepared.get(plan);
   if (known) return known;
-  const made = { runtime: buildRuntime(plan), templates: new Map<string, Template>() };
+  const stationery = { templates: new Map(), standings: new Standings(plan.edition) };
+  const made = { runtime: buildRuntime(plan), stationery };
   prepared.set(plan, made);
   return made;
 }

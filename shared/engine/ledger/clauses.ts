@@ -1,10 +1,10 @@
 import type { Case, Provenance } from '#shared/basis/schema/index.ts';
 import { evidenceOf } from '../decide/evidence.ts';
 import { choose, fillClause, type RunCase, type RunClause, type RunKey } from '../run/clause.ts';
+import { evaluate } from '../run/formula.ts';
 import type { RunSymbol } from '../run/runtime.ts';
 import type { Choosing, LedgerEntry } from '../types.ts';
 import type { Draft, Recorder, Uses } from './recorder.ts';
-import { standingOf } from './standing.ts';
 import { headOf } from './stored.ts';
 
 /** A clause's value: the case that gave it, what that case looked at, and how the value came about. */
@@ -25,7 +25,8 @@ export function recordClause(recorder: Recorder, known: RunSymbol): Draft {
     in: 'edition',
     pointer: `/clauses/${run.index}`,
   };
-  const made = typeof chosen === 'number' ? { ...draft, ...outcome(recorder, run, chosen, uses) } : draft;
+  const made =
+    typeof chosen === 'number' ? Object.assign(draft, outcome(recorder, run, chosen, uses)) : draft;
   return context.overrides?.has(known.slot) ? departed(recorder, known, run, made) : made;
 }
 
@@ -60,7 +61,7 @@ function outcome(recorder: Recorder, run: RunClause, chosen: number, uses: Uses)
   const { gives } = run.cases[chosen] as RunCase;
   const { provenance } = run.clause.cases[chosen] as Case;
   const pointer = `/clauses/${run.index}/cases/${chosen}`;
-  const base = { standing: standingOf(edition, provenance), pointer };
+  const base = { standing: recorder.standings.of(provenance), pointer };
   if (gives.kind === 'formula') return { ...base, ...recorder.run(gives.formula, uses) };
   if (gives.kind === 'spanLimit') {
     recorder.symbols(['L'], uses);
@@ -77,7 +78,7 @@ function outcome(recorder: Recorder, run: RunClause, chosen: number, uses: Uses)
   const cell = looked?.cell === undefined ? undefined : table?.cells?.[String(looked.cell)];
   const stored: Provenance = cell ?? table?.provenance ?? provenance;
   return {
-    standing: standingOf(edition, stored),
+    standing: recorder.standings.of(stored),
     pointer,
     uses,
     lookup: { table: table?.title ?? gives.table, keys: keys ?? [], found: looked?.found ?? '' },
@@ -93,7 +94,7 @@ function keysOf(recorder: Recorder, keys: readonly RunKey[]): (number | string)[
         ? key.value
         : key.kind === 'fact'
           ? recorder.env.value(key.slot)
-          : key.formula.run(recorder.env.numbers);
+          : evaluate(key.formula, recorder.env);
     if (value === null || Number.isNaN(value)) return null;
     values.push(value);
   }

@@ -6,7 +6,6 @@ import { MOMENT_TERMS, valueAt } from '../effects/grid.ts';
 import { atTerm, leaveTerm } from '../run/terms.ts';
 import { placeName, spanNames } from './places.ts';
 import type { Draft, Recorder, Uses } from './recorder.ts';
-import { standingOf } from './standing.ts';
 
 /** Effects that add up over the actions of a combination. */
 export type SummedEffect = 'M' | 'V' | 'V_d' | 'R' | 'w';
@@ -69,7 +68,7 @@ export function recordFactor(
       unit: '1',
       reference: pattern.reference,
       ...written,
-      standing: standingOf(context.edition, pattern.provenance),
+      standing: recorder.standings.of(pattern.provenance),
       in: 'edition',
       pointer: `/combinations/${combination.pattern}/terms/${term}/factor`,
     };

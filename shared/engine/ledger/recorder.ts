@@ -6,10 +6,17 @@ import type { LedgerEntry } from '../types.ts';
 import { recordBuiltIn } from './builtIns.ts';
 import { recordClause } from './clauses.ts';
 import { recordActionValue, recordChoice, recordGradeValue, recordInput } from './stored.ts';
-import { substitute, type Template, templateOf } from './substitute.ts';
+import type { Standings } from './standing.ts';
+import { substitute, type Template, templateOf, written } from './substitute.ts';
 
 export type Draft = Omit<LedgerEntry, 'n'>;
 export type Uses = Record<string, number>;
+
+/** What ledgers of one plan have in common. */
+export interface Stationery {
+  templates: Map<string, Template>;
+  standings: Standings;
+}
 
 /**
  * Writes the ledger while the evaluation stands at the place concerned. An entry is written after those
@@ -22,12 +29,16 @@ export class Recorder {
   readonly context: Context;
   readonly #known = new Map<string, number>();
   readonly #templates: Map<string, Template>;
+  /** Values of the entries as they stand inside formulas. */
+  readonly #texts: string[] = [];
+  readonly standings: Standings;
 
-  constructor(runtime: Runtime, env: Env, context: Context, templates: Map<string, Template>) {
+  constructor(runtime: Runtime, env: Env, context: Context, { templates, standings }: Stationery) {
     this.runtime = runtime;
     this.env = env;
     this.context = context;
     this.#templates = templates;
+    this.standings = standings;
   }
 
   /** Entry under a key, made on first use. */
@@ -41,7 +52,7 @@ export class Recorder {
 
   add(draft: Draft): number {
     const n = this.entries.length;
-    this.entries.push({ n, ...draft });
+    this.entries.push(Object.assign(draft, { n }));
     return n;
   }
 
@@ -61,20 +72,20 @@ export class Recorder {
 
   /** Formula as written and with the numbers of the entries it uses. */
   formula(text: string, uses: Readonly<Uses>): { formula: string; substituted: string } {
-    const names = Object.keys(uses);
-    const key = `${text}|${names.join()}`;
-    let template = this.#templates.get(key);
+    let template = this.#templates.get(text);
     if (!template) {
-      template = templateOf(text, names);
-      this.#templates.set(key, template);
+      template = templateOf(text);
+      this.#templates.set(text, template);
     }
     return {
       formula: text,
-      substituted: substitute(template, (symbol) => {
-        const n = uses[symbol];
-        return n === undefined ? null : (this.entries[n] as LedgerEntry).value;
-      }),
+      substituted: substitute(template, (symbol) => this.#textOf(uses[symbol], symbol)),
     };
+  }
+
+  #textOf(n: number | undefined, symbol: string): string {
+    if (n === undefined) return symbol;
+    return (this.#texts[n] ??= written((this.entries[n] as LedgerEntry).value));
   }
 
   /** The same for a formula of the edition, whose symbols are recorded first. */

@@ -1,7 +1,6 @@
 import type { Edition } from '#shared/basis/schema/index.ts';
 import type { RunSymbol } from '../run/runtime.ts';
 import type { Draft, Recorder } from './recorder.ts';
-import { standingOf } from './standing.ts';
 
 /** What every entry of a symbol says first. */
 export function headOf(recorder: Recorder, { slot, symbol, title, unit }: RunSymbol) {
@@ -25,7 +24,7 @@ export function recordChoice(recorder: Recorder, known: RunSymbol): Draft {
       ...head,
       kind: 'grade',
       uses: {},
-      standing: standingOf(edition, given.grade.provenance),
+      standing: recorder.standings.of(given.grade.provenance),
       in: 'edition',
       pointer: `/grades/rows/${given.gradeIndex}/choices/${choice.symbol}`,
     };
@@ -75,15 +74,14 @@ export function recordInput(recorder: Recorder, known: RunSymbol): Draft {
 
 /** A value of the grade table. */
 export function recordGradeValue(recorder: Recorder, known: RunSymbol): Draft {
-  const { edition, given } = recorder.context;
-  const { grade, gradeIndex } = given;
+  const { grade, gradeIndex } = recorder.context.given;
   const cell = Object.hasOwn(grade.values, known.symbol) ? grade.values[known.symbol] : undefined;
   const provenance = grade.cells?.[known.symbol] ?? grade.provenance;
   const draft: Draft = {
     ...headOf(recorder, known),
     kind: 'grade',
     uses: {},
-    standing: standingOf(edition, provenance),
+    standing: recorder.standings.of(provenance),
     in: 'edition',
     pointer: `/grades/rows/${gradeIndex}/values/${known.symbol}`,
   };
@@ -111,7 +109,7 @@ export function recordActionValue(recorder: Recorder, known: RunSymbol): Draft {
     kind: 'action',
     title: `${head.title}: ${carrying?.title ?? ''}`,
     uses: {},
-    ...(carrying ? { standing: standingOf(edition, carrying.provenance) } : {}),
+    ...(carrying ? { standing: recorder.standings.of(carrying.provenance) } : {}),
     in: 'edition',
     pointer: `/actions/${action}/values/${known.symbol}`,
   };

@@ -7,8 +7,14 @@ export interface Template {
 /** Numbers (so that the e of 1e-9 is no symbol), then names. */
 const token = /(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?|[A-Za-z][A-Za-z0-9_]*/g;
 
-/** Cuts a formula at the symbols given; functions and anything else stay text. */
-export function templateOf(formula: string, symbols: readonly string[]): Template {
+/** Names in formulas that are no symbols: what the language has, and what slopes need in the ledger. */
+const reserved = new Set([
+  ...['min', 'max', 'sqrt', 'abs', 'round', 'ceil', 'floor', 'exp', 'log', 'log10'],
+  ...['and', 'or', 'not', 'cos', 'pi'],
+]);
+
+/** Cuts a formula at its symbols. */
+export function templateOf(formula: string): Template {
   const parts: string[] = [];
   let text = '';
   let last = 0;
@@ -16,7 +22,7 @@ export function templateOf(formula: string, symbols: readonly string[]): Templat
     const word = match[0];
     text += formula.slice(last, match.index);
     last = match.index + word.length;
-    if (symbols.includes(word)) {
+    if (/^[A-Za-z]/.test(word) && !reserved.has(word)) {
       parts.push(text, word);
       text = '';
     } else text += word;
@@ -25,16 +31,17 @@ export function templateOf(formula: string, symbols: readonly string[]): Templat
   return { parts };
 }
 
-/** The formula with exact numbers in place of its symbols; negative ones in brackets. */
-export function substitute({ parts }: Template, valueOf: (symbol: string) => number | string | null): string {
+/** The formula with a text in place of each of its symbols. */
+export function substitute({ parts }: Template, textOf: (symbol: string) => string): string {
   let text = parts[0] as string;
   for (let i = 1; i < parts.length; i += 2) {
-    text += written(valueOf(parts[i] as string)) + (parts[i + 1] as string);
+    text += textOf(parts[i] as string) + (parts[i + 1] as string);
   }
   return text;
 }
 
-function written(value: number | string | null): string {
+/** A value for use inside a formula: exact, negative numbers in brackets. */
+export function written(value: number | string | null): string {
   if (typeof value === 'number') return value < 0 ? `(${String(value)})` : String(value);
   return value === null ? '?' : `“${value}”`;
 }

@@ -1,8 +1,7 @@
 import type { Edition, Member } from '#shared/basis/schema/index.ts';
 import type { Standing } from '../assess/stand.ts';
 import { recordFactor } from '../ledger/effects.ts';
-import { Recorder } from '../ledger/recorder.ts';
-import type { Template } from '../ledger/substitute.ts';
+import { Recorder, type Stationery } from '../ledger/recorder.ts';
 import type { Combination, Finding, Result } from '../types.ts';
 import { ENGINE_VERSION } from '../version.ts';
 import { checkResult } from './checks.ts';
@@ -52,11 +51,11 @@ export function resultOf(
   standing: Standing,
   editionHash: string,
   memberHash: string,
-  templates: Map<string, Template>,
+  stationery: Stationery,
 ): Result {
   const { context, runtime, env, given, assessments, findings } = standing;
   const { edition } = context;
-  const recorder = new Recorder(runtime, env, context, templates);
+  const recorder = new Recorder(runtime, env, context, stationery);
   const ordered = inOrder(assessments);
   const checks = ordered.map((assessment) => checkResult(standing, recorder, assessment));
   const combinations = combinationsOf(standing);
