@@ -6,6 +6,13 @@ export const MOST_SPANS = 50;
 /** Shorter than this share of the whole member, a span is a slip of the keyboard. */
 const LEAST_SHARE = 1e-6;
 
+/**
+ * Sizes that can be analysed, in any units: far beyond any timber, yet such that fourth powers of lengths,
+ * times loads, by stiffness, are still numbers to a machine.
+ */
+const SMALLEST = 1e-30;
+const LARGEST = 1e30;
+
 /** How far beyond an end a load may lie before it counts as outside, as a share of the member: rounding. */
 const ROUNDING_SHARE = 1e-12;
 
@@ -20,12 +27,14 @@ export function beamProblems(beam: Beam): AnalysisProblem[] {
     return [{ code: 'too-many-spans', message }];
   }
   const problems = lengthProblems(spans);
-  if (!isPositive(EI)) {
-    const message = 'The bending stiffness EI of the member has to be a number above 0.';
+  if (!isMeasure(EI)) {
+    const message =
+      'The bending stiffness EI of the member has to be a number above 0, of a size that can be built.';
     problems.push({ code: 'bad-stiffness', message });
   }
-  if (GA !== undefined && !isPositive(GA)) {
-    const message = 'The shear stiffness GA of the member has to be a number above 0.';
+  if (GA !== undefined && !isMeasure(GA)) {
+    const message =
+      'The shear stiffness GA of the member has to be a number above 0, of a size that can be built.';
     problems.push({ code: 'bad-stiffness', message });
   }
   problems.push(...restraintProblems(beam));
@@ -40,10 +49,10 @@ export function beamProblems(beam: Beam): AnalysisProblem[] {
 function lengthProblems(spans: readonly number[]): AnalysisProblem[] {
   const problems: AnalysisProblem[] = [];
   let total = 0;
-  for (const length of spans) total += isPositive(length) ? length : 0;
+  for (const length of spans) total += isMeasure(length) ? length : 0;
   spans.forEach((length, index) => {
-    if (!isPositive(length)) {
-      const message = `Span ${index + 1} has to have a length above 0.`;
+    if (!isMeasure(length)) {
+      const message = `Span ${index + 1} has to have a length above 0, of a size that can be built.`;
       problems.push({ code: 'bad-length', message, index });
     } else if (length < total * LEAST_SHARE) {
       const message = `Span ${index + 1} is less than a millionth of the member. Check its length.`;
@@ -74,8 +83,8 @@ export function loadProblems(loads: readonly BeamLoad[], length: number): Analys
   const beyond = length * ROUNDING_SHARE;
   for (let index = 0; index < loads.length; index += 1) {
     const load = loads[index] as BeamLoad;
-    if (!isFiniteLoad(load)) {
-      const message = `Load ${index + 1} has a place or a value that is not a finite number.`;
+    if (!isSized(load)) {
+      const message = `Load ${index + 1} has a place or a value that is not a number, or beyond all measure.`;
       problems.push({ code: 'bad-load', message, index });
       continue;
     }
@@ -92,18 +101,22 @@ export function loadProblems(loads: readonly BeamLoad[], length: number): Analys
   return problems;
 }
 
-function isFiniteLoad(load: BeamLoad): boolean {
+function isSized(load: BeamLoad): boolean {
   if (load.kind === 'line') {
     return (
       Number.isFinite(load.from) &&
       Number.isFinite(load.to) &&
-      Number.isFinite(load.startIntensity) &&
-      Number.isFinite(load.endIntensity)
+      isLoadValue(load.startIntensity) &&
+      isLoadValue(load.endIntensity)
     );
   }
-  return Number.isFinite(load.x) && Number.isFinite(load.kind === 'point' ? load.force : load.moment);
+  return Number.isFinite(load.x) && isLoadValue(load.kind === 'point' ? load.force : load.moment);
 }
 
-function isPositive(value: number): boolean {
-  return value > 0 && Number.isFinite(value);
+function isMeasure(value: number): boolean {
+  return value >= SMALLEST && value <= LARGEST;
+}
+
+function isLoadValue(value: number): boolean {
+  return Math.abs(value) <= LARGEST;
 }

@@ -26,9 +26,8 @@ export function prepare(beam: Beam): Prepared {
   if (problems.length) return { ok: false, problems };
   const frame = frameOf(beam);
   if (!frame) {
-    const message =
-      'The lengths and the stiffness of the member are too large or too small to calculate with.';
-    return { ok: false, problems: [{ code: 'bad-length', message }] };
+    const message = 'The shear stiffness GA is too small beside the bending stiffness EI to calculate with.';
+    return { ok: false, problems: [{ code: 'bad-stiffness', message }] };
   }
   return { ok: true, solver: { solve: (loads) => solveFrame(frame, loads) } };
 }
@@ -82,7 +81,6 @@ function solveFrame(frame: Frame, loads: readonly BeamLoad[]): AnalysisOutcome {
   const fixingMoments = restraints.map((restraint, i) =>
     restraint === 'fixed' ? 0 - (placed.nodeCouples[i] as number) : 0,
   );
-  let sound = true;
   for (let i = 0; i < spans.length; i += 1) {
     const own = placed.spans[i] as SpanLoads;
     const start = startOf(frame, placed, alone, ends, i);
@@ -100,15 +98,9 @@ function solveFrame(frame: Frame, loads: readonly BeamLoad[]): AnalysisOutcome {
     reactions[i + 1] = (reactions[i + 1] as number) - end.shear;
     if (restraints[i] === 'fixed') fixingMoments[i] = (fixingMoments[i] as number) + start.moment;
     if (restraints[i + 1] === 'fixed') fixingMoments[i + 1] = (fixingMoments[i + 1] as number) - end.moment;
-    sound &&= isSound(start, flexibility) && isSound(end, flexibility);
   }
-  for (let i = 0; i < reactions.length; i += 1) {
-    if (restraints[i] === 'free') reactions[i] = 0;
-    sound &&= Number.isFinite(reactions[i]) && Number.isFinite(fixingMoments[i]);
-  }
-  if (sound) return { ok: true, effects: { ...course, reactions, fixingMoments } };
-  const message = 'The loads and the stiffness of the member are too large or too small to calculate with.';
-  return { ok: false, problems: [{ code: 'bad-load', message }] };
+  for (let i = 0; i < reactions.length; i += 1) if (restraints[i] === 'free') reactions[i] = 0;
+  return { ok: true, effects: { ...course, reactions, fixingMoments } };
 }
 
 /** Sagging moments at both ends of each span, and the rotation of each support. */
@@ -187,13 +179,4 @@ function startOf(
       ? (placed.nodeForces[i + 1] as number) - loads.shear
       : ((right[i] as number) - moment - loads.moment) / length;
   return { shear, moment, rotation: rotations[i] as number, deflection: 0 };
-}
-
-function isSound({ shear, moment, rotation, deflection }: Section, flexibility: number): boolean {
-  return (
-    Number.isFinite(shear) &&
-    Number.isFinite(moment) &&
-    Number.isFinite(rotation * flexibility) &&
-    Number.isFinite(deflection * flexibility)
-  );
 }

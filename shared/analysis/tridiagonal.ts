@@ -4,12 +4,15 @@ export interface Tridiagonal {
   solve: (rhs: Float64Array) => void;
 }
 
+/** What is left of a diagonal entry after elimination; less of it means that many digits are lost. */
+const LEAST_PIVOT = 1e-9;
+
 /**
  * LDLᵀ factorisation without pivoting, sound for a positive definite matrix.
  *
  * @param diagonal Entries (i, i).
  * @param beside Entries (i, i + 1).
- * @returns Null where the matrix is not positive definite or not finite.
+ * @returns Null where the matrix is not positive definite, or so nearly not that the solution would be noise.
  */
 export function factorise(diagonal: Float64Array, beside: Float64Array): Tridiagonal | null {
   const n = diagonal.length;
@@ -17,7 +20,7 @@ export function factorise(diagonal: Float64Array, beside: Float64Array): Tridiag
   const factors = new Float64Array(n);
   for (let i = 0; i < n; i += 1) {
     const pivot = pivots[i] as number;
-    if (!(pivot > 0 && Number.isFinite(pivot))) return null;
+    if (!(pivot > LEAST_PIVOT * (diagonal[i] as number))) return null;
     if (i + 1 === n) break;
     const factor = (beside[i] as number) / pivot;
     factors[i] = factor;

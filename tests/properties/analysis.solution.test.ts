@@ -15,7 +15,7 @@ import { type Sample, solveDensely } from '../factories/denseBeam.ts';
 const keys = ['shear', 'moment', 'rotation', 'deflection'] as const;
 
 describe('members of 1 to 8 spans, any restraints and loads, with and without shear deformation', () => {
-  it('agree with a dense solution by mathjs to 1e-6', () => {
+  it('agree with a dense solution by mathjs to 1e-8', () => {
     fc.assert(
       fc.property(aLoadedBeam(), ({ beam, loads }) => {
         const effects = effectsOf(beam, loads);
@@ -32,11 +32,11 @@ describe('members of 1 to 8 spans, any restraints and loads, with and without sh
         }
         const forces = Math.max(...dense.reactions.map(Math.abs), gauge.shear / 1000, 1e-12);
         dense.reactions.forEach((reaction, node) => {
-          expect(Math.abs((effects.reactions[node] ?? NaN) - reaction)).toBeLessThan(1e-6 * forces);
+          expect(Math.abs((effects.reactions[node] ?? NaN) - reaction)).toBeLessThan(1e-8 * forces);
         });
         const moments = Math.max(...dense.fixingMoments.map(Math.abs), gauge.moment / 1000, 1e-12);
         dense.fixingMoments.forEach((moment, node) => {
-          expect(Math.abs((effects.fixingMoments[node] ?? NaN) - moment)).toBeLessThan(1e-6 * moments);
+          expect(Math.abs((effects.fixingMoments[node] ?? NaN) - moment)).toBeLessThan(1e-8 * moments);
         });
       }),
       { numRuns: 400 },
@@ -54,5 +54,5 @@ function near(
   // A hair inside the segment, so that a jump at its end is seen from the right side.
   const x = sample.x + (side === 'right' ? 1e-12 : 0) - (side === 'left' ? 1e-12 : 0);
   const difference = Math.abs(valueAt(effects[key], x, side) - sample[key]);
-  expect(difference, `${key} at ${sample.x} from the ${side}`).toBeLessThan(1e-6 * scale);
+  expect(difference, `${key} at ${sample.x} from the ${side}`).toBeLessThan(1e-8 * scale);
 }
