@@ -1,0 +1,54 @@
+import { useQuery, useQueryClient } from '@tanstack/react-query';
+import type { Action } from '#shared/access/index.ts';
+import {
+  createSession,
+  deleteSession,
+  readSession,
+  type Session,
+  type SignedIn,
+} from '#shared/contracts/session.ts';
+import { call, keepToken } from './call.ts';
+
+export const sessionKey = ['session'] as const;
+
+async function fetchSession(): Promise<Session> {
+  const session = await call(readSession);
+  keepToken(session.csrf);
+  return session;
+}
+
+/** Who is signed in. */
+export function useSession() {
+  return useQuery({ queryKey: sessionKey, queryFn: fetchSession, staleTime: 300_000 });
+}
+
+/** The person signed in; only within pages that need one. */
+export function useSignedIn(): SignedIn {
+  const { data } = useSession();
+  if (!data?.signedIn) throw new Error('This page needs someone signed in.');
+  return data.signedIn;
+}
+
+export const may = (record: { abilities: readonly Action[] } | undefined, action: Action): boolean =>
+  record?.abilities.includes(action) ?? false;
+
+export function useSignIn() {
+  const client = useQueryClient();
+  return async (email: string, password: string): Promise<Session> => {
+    const before = await call(readSession);
+    keepToken(before.csrf);
+    const session = await call(createSession, { body: { email, password } });
+    keepToken(session.csrf);
+    client.setQueryData(sessionKey, session);
+    return session;
+  };
+}
+
+export function useSignOut() {
+  const client = useQueryClient();
+  return async (): Promise<void> => {
+    await call(deleteSession);
+    client.clear();
+    await client.fetchQuery({ queryKey: sessionKey, queryFn: fetchSession });
+  };
+}

@@ -1,0 +1,1 @@
+export { BasesPage as default } from '#src/features/bases/components/BasesPage.tsx';

@@ -1,0 +1,1 @@
+export { BasisPage as default } from '#src/features/bases/components/BasisPage.tsx';

@@ -1,0 +1,1 @@
+export { DeskPage as default } from '#src/features/desk/components/DeskPage.tsx';

@@ -1,0 +1,1 @@
+export { EditionPage as default } from '#src/features/bases/components/EditionPage.tsx';

@@ -1,0 +1,1 @@
+export { FirmPage as default } from '#src/features/firm/components/FirmPage.tsx';

@@ -1,0 +1,1 @@
+export { MemberPage as default } from '#src/features/members/components/MemberPage.tsx';

@@ -1,0 +1,1 @@
+export { SignInPage as default } from '#src/features/session/components/SignInPage.tsx';

@@ -1,0 +1,1 @@
+export { StockListPage as default } from '#src/features/stock/components/StockListPage.tsx';

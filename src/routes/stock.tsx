@@ -1,0 +1,1 @@
+export { StockPage as default } from '#src/features/stock/components/StockPage.tsx';

@@ -1,0 +1,1 @@
+export { TrailPage as default } from '#src/features/trail/components/TrailPage.tsx';
