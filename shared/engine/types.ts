@@ -93,7 +93,7 @@ export interface LedgerEntry {
   /** For table look-ups: table, the keys used and how the value was found. */
   lookup?: { table: string; keys: readonly (number | string)[]; found: string };
   /** Symbol to entry: what the formula, the table keys or the condition looked at. */
-  uses: Readonly<Record<string, number>>;
+  uses: Record<string, number>;
   standing?: Standing;
   departure?: { stored: number | null; reason: string; approvedBy?: string };
   /** Why there is no value. */

@@ -1,13 +1,13 @@
 import type { RunSymbol } from '../run/runtime.ts';
-import type { EntryKind } from '../types.ts';
+import type { LedgerEntry } from '../types.ts';
 import { recordSpan, recordSum, type SummedEffect } from './effects.ts';
 import { placeName } from './places.ts';
-import type { Draft, Recorder, Uses } from './recorder.ts';
-import { headOf } from './stored.ts';
+import type { Uses } from './entry.ts';
+import type { Recorder } from './recorder.ts';
+import { symbolEntry } from './stored.ts';
 
 /** Where a fact of the member stands in its document. */
 const memberPointers: Readonly<Record<string, string>> = {
-  b: '/section/b',
   b_1: '/section/b',
   h: '/section/h',
   b_nominal: '/section/nominal/b',
@@ -16,7 +16,6 @@ const memberPointers: Readonly<Record<string, string>> = {
   spacing: '/carries/width',
   tributary: '/carries/width',
   spans: '/spans',
-  L_max: '/spans',
   slope: '/slope',
   grade: '/grade',
 };
@@ -24,73 +23,66 @@ const memberPointers: Readonly<Record<string, string>> = {
 const fromAnalysis = new Set(['M', 'M_variable', 'V', 'V_d', 'V_variable', 'R', 'R_up', 'R_variable', 'w']);
 
 /** A fact that every member has. */
-export function recordBuiltIn(recorder: Recorder, known: RunSymbol): Draft {
-  const { symbol } = known;
-  const head = headOf(recorder, known);
-  const { place, combination, geometry, given } = recorder.context;
-  const where = place ? `, ${placeName(place, geometry?.nodes.length ?? 0)}` : '';
-  if (head.value !== null && fromAnalysis.has(symbol)) {
-    return { ...head, title: `${head.title}${where}`, ...summed(recorder, symbol, known.unit) };
+export function recordBuiltIn(recorder: Recorder, known: RunSymbol): LedgerEntry {
+  const { symbol, slot, level } = known;
+  if (fromAnalysis.has(symbol) && recorder.env.value(slot) !== null) return summed(recorder, known);
+  if (symbol === 'b' || symbol === 'L' || symbol === 'L_max') return measured(recorder, known);
+  if (level === 'member' || level === 'edition') {
+    return symbolEntry(recorder, known, 'input', {}, 'member', memberPointers[symbol] ?? '');
   }
-  switch (symbol) {
-    case 'b': {
-      if (given.section.pieces === 1) break;
-      const uses = recorder.symbols(['b_1', 'pieces']);
-      return { ...head, kind: 'input', uses, ...recorder.formula('b_1 * pieces', uses), ...memberAt(symbol) };
-    }
-    case 'L': {
-      const span = place?.span ?? 0;
-      const uses: Uses = { [`L_${span + 1}`]: recordSpan(recorder, span) };
-      return {
-        ...head,
-        title: `${head.title} ${span + 1}`,
-        kind: 'quantity',
-        uses,
-        ...recorder.formula(`L_${span + 1}`, uses),
-        in: 'edition',
-        pointer: '/analysis/span',
-      };
-    }
-    case 'L_max': {
-      const uses: Uses = {};
-      geometry?.spans.forEach((_, span) => {
-        uses[`L_${span + 1}`] = recordSpan(recorder, span);
-      });
-      const formula = `max(${Object.keys(uses).join(', ')})`;
-      return { ...head, kind: 'quantity', uses, ...recorder.formula(formula, uses), ...memberAt(symbol) };
-    }
-    case 'L_0': {
-      const uses = recorder.symbols(['M']);
-      return { ...head, title: `${head.title}${where}`, kind: 'effect', uses, in: 'edition', pointer: '' };
-    }
-    default:
+  const { place, combination, pattern } = recorder.context;
+  if (level === 'combination' || level === 'term') {
+    const pointer = `/combinations/${combination?.pattern ?? pattern}`;
+    return symbolEntry(recorder, known, 'combination', {}, 'edition', pointer);
   }
-  if (known.level === 'member' || known.level === 'edition') {
-    return { ...head, kind: 'input', uses: {}, ...memberAt(symbol) };
-  }
-  if (known.level === 'combination' || known.level === 'term') {
-    const pattern = combination?.pattern ?? recorder.context.pattern;
-    return { ...head, kind: 'combination', uses: {}, in: 'edition', pointer: `/combinations/${pattern}` };
-  }
-  const kind: EntryKind = symbol === 'l_b' ? 'input' : 'effect';
-  return {
-    ...head,
-    title: `${head.title}${where}`,
-    kind,
-    uses: {},
-    ...(symbol === 'l_b'
-      ? { in: 'member', pointer: `/supports/${place?.node ?? 0}/bearing` }
-      : { in: 'edition', pointer: '' }),
-  };
+  const entry =
+    symbol === 'l_b'
+      ? symbolEntry(recorder, known, 'input', {}, 'member', `/supports/${place?.node ?? 0}/bearing`)
+      : symbolEntry(
+          recorder,
+          known,
+          'effect',
+          symbol === 'L_0' ? recorder.symbols(['M']) : {},
+          'edition',
+          '',
+        );
+  entry.title += placeSuffix(recorder);
+  return entry;
 }
 
-function memberAt(symbol: string): { in: 'member'; pointer: string } {
-  return { in: 'member', pointer: memberPointers[symbol] ?? '' };
+function placeSuffix({ context: { place, geometry } }: Recorder): string {
+  return place ? `, ${placeName(place, geometry?.nodes.length ?? 0)}` : '';
+}
+
+/** Sizes that are worked out from what was typed. */
+function measured(recorder: Recorder, known: RunSymbol): LedgerEntry {
+  const { symbol } = known;
+  const { place, geometry, given } = recorder.context;
+  if (symbol === 'b') {
+    const { pieces } = given.section;
+    const uses = pieces === 1 ? {} : recorder.symbols(['b_1', 'pieces']);
+    const entry = symbolEntry(recorder, known, 'input', uses, 'member', '/section/b');
+    return pieces === 1 ? entry : recorder.formula(entry, 'b_1 * pieces');
+  }
+  const uses: Uses = {};
+  if (symbol === 'L') {
+    const span = place?.span ?? 0;
+    uses[`L_${span + 1}`] = recordSpan(recorder, span);
+    const entry = symbolEntry(recorder, known, 'quantity', uses, 'edition', '/analysis/span');
+    entry.title += ` ${span + 1}`;
+    return recorder.formula(entry, `L_${span + 1}`);
+  }
+  geometry?.spans.forEach((_, span) => {
+    uses[`L_${span + 1}`] = recordSpan(recorder, span);
+  });
+  const entry = symbolEntry(recorder, known, 'quantity', uses, 'member', '/spans');
+  return geometry ? recorder.formula(entry, `max(${Object.keys(uses).join(', ')})`) : entry;
 }
 
 /** Sum over the actions: size of the whole, or the part from variable actions in its direction. */
-function summed(recorder: Recorder, symbol: string, unit: string) {
+function summed(recorder: Recorder, known: RunSymbol): LedgerEntry {
   const { place, geometry } = recorder.context;
+  const { symbol, unit } = known;
   const onlyVariable = symbol.endsWith('_variable');
   const effect = (
     onlyVariable ? symbol.slice(0, -'_variable'.length) : symbol.replace('_up', '')
@@ -99,14 +91,9 @@ function summed(recorder: Recorder, symbol: string, unit: string) {
   const sloping = effect === 'R' && geometry?.cosine !== 1;
   if (sloping) recorder.symbols(['slope'], uses);
   const whole = sloping ? `(${sum}) / cos(slope * pi / 180)` : sum;
-  const formula = written(symbol, whole, (place?.value ?? 0) < 0);
-  return {
-    kind: 'effect' as const,
-    uses,
-    ...recorder.formula(formula, uses),
-    in: 'edition' as const,
-    pointer: '',
-  };
+  const entry = symbolEntry(recorder, known, 'effect', uses, 'edition', '');
+  entry.title += placeSuffix(recorder);
+  return recorder.formula(entry, written(symbol, whole, (place?.value ?? 0) < 0));
 }
 
 function written(symbol: string, sum: string, negative: boolean): string {

@@ -1,33 +1,29 @@
-import type { Case, Provenance } from '#shared/basis/schema/index.ts';
+import type { Case } from '#shared/basis/schema/index.ts';
 import { evidenceOf } from '../decide/evidence.ts';
 import { choose, fillClause, type RunCase, type RunClause, type RunKey } from '../run/clause.ts';
 import { evaluate } from '../run/formula.ts';
 import type { RunSymbol } from '../run/runtime.ts';
 import type { Choosing, LedgerEntry } from '../types.ts';
-import type { Draft, Recorder, Uses } from './recorder.ts';
-import { headOf } from './stored.ts';
+import type { Uses } from './entry.ts';
+import type { Recorder } from './recorder.ts';
+import { symbolEntry } from './stored.ts';
 
 /** A clause's value: the case that gave it, what that case looked at, and how the value came about. */
-export function recordClause(recorder: Recorder, known: RunSymbol): Draft {
+export function recordClause(recorder: Recorder, known: RunSymbol): LedgerEntry {
   const { env, runtime, context } = recorder;
   const run = runtime.clauseAt.get(known.slot) as RunClause;
   const { clause } = run;
   const uses: Uses = {};
   const chosen = choose(run, env);
   const choosing = chosenBy(recorder, run, chosen, uses);
-  const draft: Draft = {
-    ...headOf(recorder, known),
-    kind: clause.kind,
-    reference: clause.reference,
-    clause: clause.id,
-    ...(choosing ? { choosing } : {}),
-    uses,
-    in: 'edition',
-    pointer: `/clauses/${run.index}`,
-  };
-  const made =
-    typeof chosen === 'number' ? Object.assign(draft, outcome(recorder, run, chosen, uses)) : draft;
-  return context.overrides?.has(known.slot) ? departed(recorder, known, run, made) : made;
+  if (typeof chosen === 'number') recordLookedAt(recorder, run, chosen, uses);
+  const entry = symbolEntry(recorder, known, clause.kind, uses, 'edition', `/clauses/${run.index}`);
+  entry.reference = clause.reference;
+  entry.clause = clause.id;
+  if (choosing) entry.choosing = choosing;
+  if (context.overrides?.has(known.slot)) depart(recorder, known, run, entry);
+  else if (typeof chosen === 'number') setOutcome(recorder, run, chosen, entry);
+  return entry;
 }
 
 /** The conditions that were tried, in order, with what each comparison saw. */
@@ -56,33 +52,36 @@ function chosenBy(
   return { case: by.id, ...(by.title === undefined ? {} : { title: by.title }), tried };
 }
 
-function outcome(recorder: Recorder, run: RunClause, chosen: number, uses: Uses): Partial<Draft> {
+/** Records what the formula or the table keys of the chosen case look at. */
+function recordLookedAt(recorder: Recorder, run: RunClause, chosen: number, uses: Uses): void {
+  const { gives } = run.cases[chosen] as RunCase;
+  if (gives.kind === 'formula') recorder.symbols(gives.formula.symbols, uses);
+  else if (gives.kind === 'spanLimit') recorder.symbols(['L'], uses);
+  else if (gives.kind === 'table') {
+    for (const key of gives.keys) {
+      if (key.kind === 'fact') recorder.symbols([key.symbol], uses);
+      else if (key.kind === 'formula') recorder.symbols(key.formula.symbols, uses);
+    }
+  }
+}
+
+/** How the chosen case came to its value, and where that is stored. */
+function setOutcome(recorder: Recorder, run: RunClause, chosen: number, entry: LedgerEntry): void {
   const { edition } = recorder.context;
   const { gives } = run.cases[chosen] as RunCase;
   const { provenance } = run.clause.cases[chosen] as Case;
-  const pointer = `/clauses/${run.index}/cases/${chosen}`;
-  const base = { standing: recorder.standings.of(provenance), pointer };
-  if (gives.kind === 'formula') return { ...base, ...recorder.run(gives.formula, uses) };
-  if (gives.kind === 'spanLimit') {
-    recorder.symbols(['L'], uses);
-    return { ...base, ...recorder.formula(gives.formula, uses), uses };
+  entry.pointer = `/clauses/${run.index}/cases/${chosen}`;
+  entry.standing = recorder.standings.of(provenance);
+  if (gives.kind === 'formula') recorder.formula(entry, gives.formula.text);
+  else if (gives.kind === 'spanLimit') recorder.formula(entry, gives.formula);
+  else if (gives.kind === 'table') {
+    const table = edition.tables.find(({ id }) => id === gives.table);
+    const keys = keysOf(recorder, gives.keys);
+    const looked = keys && gives.explain(keys);
+    const cell = looked?.cell === undefined ? undefined : table?.cells?.[String(looked.cell)];
+    entry.standing = recorder.standings.of(cell ?? table?.provenance ?? provenance);
+    entry.lookup = { table: table?.title ?? gives.table, keys: keys ?? [], found: looked?.found ?? '' };
   }
-  if (gives.kind !== 'table') return base;
-  for (const key of gives.keys) {
-    if (key.kind === 'fact') recorder.symbols([key.symbol], uses);
-    else if (key.kind === 'formula') recorder.symbols(key.formula.symbols, uses);
-  }
-  const table = edition.tables.find(({ id }) => id === gives.table);
-  const keys = keysOf(recorder, gives.keys);
-  const looked = keys && gives.explain(keys);
-  const cell = looked?.cell === undefined ? undefined : table?.cells?.[String(looked.cell)];
-  const stored: Provenance = cell ?? table?.provenance ?? provenance;
-  return {
-    standing: recorder.standings.of(stored),
-    pointer,
-    uses,
-    lookup: { table: table?.title ?? gives.table, keys: keys ?? [], found: looked?.found ?? '' },
-  };
 }
 
 /** Exact keys of a look-up; null where one has no value. */
@@ -101,31 +100,17 @@ function keysOf(recorder: Recorder, keys: readonly RunKey[]): (number | string)[
   return values;
 }
 
-/** A clause departed from: the departure's value, with what the edition would give and the reason. */
-function departed(recorder: Recorder, known: RunSymbol, run: RunClause, made: Draft): Draft {
+/** A clause departed from: what the edition would give, the reason, and who approved. */
+function depart(recorder: Recorder, { slot }: RunSymbol, run: RunClause, entry: LedgerEntry): void {
   const { env, context } = recorder;
   const departure = context.given.departures.get(run.clause.id);
-  if (!departure) return made;
-  const value = env.value(known.slot);
+  if (!departure) return;
   fillClause(run, env);
-  const stored = env.value(known.slot);
-  env.setNumber(known.slot, value as number);
-  const index = context.given.member.departures.indexOf(departure);
-  // How the edition would come to its value is not how this one came about.
-  const rest = { ...made };
-  delete rest.formula;
-  delete rest.substituted;
-  delete rest.lookup;
-  delete rest.refused;
-  return {
-    ...rest,
-    value,
-    departure: {
-      stored: typeof stored === 'number' ? stored : null,
-      reason: departure.reason,
-      ...(departure.approvedBy === undefined ? {} : { approvedBy: departure.approvedBy }),
-    },
-    in: 'member',
-    pointer: `/departures/${index}`,
-  };
+  const stored = env.value(slot);
+  env.setNumber(slot, entry.value as number);
+  const { reason, approvedBy } = departure;
+  entry.departure = { stored: typeof stored === 'number' ? stored : null, reason };
+  if (approvedBy !== undefined) entry.departure.approvedBy = approvedBy;
+  entry.in = 'member';
+  entry.pointer = `/departures/${context.given.member.departures.indexOf(departure)}`;
 }

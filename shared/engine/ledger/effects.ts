@@ -4,8 +4,10 @@ import { caseOf, effectsOf, nodalOf } from '../assess/situation.ts';
 import type { ExpandedCombination, ExpandedTerm } from '../combine/expand.ts';
 import { MOMENT_TERMS, valueAt } from '../effects/grid.ts';
 import { atTerm, leaveTerm } from '../run/terms.ts';
+import type { LedgerEntry } from '../types.ts';
 import { placeName, spanNames } from './places.ts';
-import type { Draft, Recorder, Uses } from './recorder.ts';
+import { entryOf, type Uses } from './entry.ts';
+import type { Recorder } from './recorder.ts';
 
 /** Effects that add up over the actions of a combination. */
 export type SummedEffect = 'M' | 'V' | 'V_d' | 'R' | 'w';
@@ -14,7 +16,7 @@ const names: Record<SummedEffect, string> = {
   M: 'Bending moment',
   V: 'Shear force',
   V_d: 'Shear force near the support',
-  R: 'Reaction at right angles to the member',
+  R: 'Reaction',
   w: 'Deflection',
 };
 
@@ -58,20 +60,21 @@ export function recordFactor(
     const carrying = context.edition.actions[action] as Edition['actions'][number];
     const formula = runtime.factors[combination.pattern]?.[term];
     atTerm(runtime, env, context, action);
-    const written = formula ? recorder.run(formula) : { uses: {} };
+    const uses = formula ? recorder.symbols(formula.symbols) : {};
     leaveTerm(runtime, env, context);
-    return {
-      kind: 'combination',
-      symbol: factorName(carrying.symbol),
-      title: `Factor on ${carrying.title.toLowerCase()}, ${combination.title}`,
-      value: factor,
-      unit: '1',
-      reference: pattern.reference,
-      ...written,
-      standing: recorder.standings.of(pattern.provenance),
-      in: 'edition',
-      pointer: `/combinations/${combination.pattern}/terms/${term}/factor`,
-    };
+    const entry = entryOf(
+      'combination',
+      factorName(carrying.symbol),
+      `Factor on ${carrying.title.toLowerCase()}, ${combination.title}`,
+      factor,
+      '1',
+      uses,
+      'edition',
+      `/combinations/${combination.pattern}/terms/${term}/factor`,
+    );
+    entry.reference = pattern.reference;
+    entry.standing = recorder.standings.of(pattern.provenance);
+    return formula ? recorder.formula(entry, formula.text) : entry;
   });
 }
 
@@ -88,16 +91,18 @@ function recordPart(
   return recorder.once(key, () => {
     const carrying = edition.actions[action] as Edition['actions'][number];
     const where = placeName(place, geometry?.nodes.length ?? 0);
-    return {
-      kind: 'effect',
-      symbol: partName(effect, carrying.symbol),
-      title: `${names[effect]} from ${carrying.title.toLowerCase()}, unfactored, ${where}${arrangement(recorder, place, action)}`,
-      value: partValue(recorder, effect, place, action),
+    const normal = effect === 'R' && geometry?.cosine !== 1 ? ' at right angles to the member' : '';
+    const name = `${names[effect]}${normal}`;
+    return entryOf(
+      'effect',
+      partName(effect, carrying.symbol),
+      `${name} from ${carrying.title.toLowerCase()}, unfactored, ${where}${arrangement(recorder, place, action)}`,
+      partValue(recorder, effect, place, action),
       unit,
-      uses: recordLoads(recorder, action, effect === 'w'),
-      in: 'edition',
-      pointer: '',
-    };
+      recordLoads(recorder, action, effect === 'w'),
+      'edition',
+      '',
+    );
   });
 }
 
@@ -148,118 +153,79 @@ function recordLoads(recorder: Recorder, action: number, withStiffness: boolean)
 
 /** A load as given, in the edition's coherent unit; a load on an area as load per length. */
 function recordLoad(recorder: Recorder, index: number): number {
-  return recorder.once(`load@${index}`, () => loadDraft(recorder, index));
+  return recorder.once(`load@${index}`, () => loadEntry(recorder, index));
 }
 
-function loadDraft(recorder: Recorder, index: number): Draft {
+function loadEntry(recorder: Recorder, index: number): LedgerEntry {
   const { edition, given } = recorder.context;
   const load = given.loads.find((each) => each.index === index);
   const source = given.member.loads[index];
   if (!load || !source) throw new RangeError(`The member has no load ${index}.`);
-  const action = edition.actions[load.action]?.title ?? source.action;
-  const [force, length] = edition.unitSystem === 'metric' ? ['N', 'mm'] : ['lbf', 'in'];
-  const head = { kind: 'input', symbol: `q_${index + 1}`, in: 'member', uses: {} } as const;
-  const title = source.title ?? action;
-  if (load.load.kind === 'point') {
-    return {
-      ...head,
-      title,
-      value: load.load.force,
-      unit: force as string,
-      pointer: `/loads/${index}/force`,
-    };
-  }
-  if (load.load.kind === 'couple') {
-    return {
-      ...head,
-      title,
-      value: load.load.moment,
-      unit: `${force as string} ${length as string}`,
-      pointer: `/loads/${index}/moment`,
-    };
-  }
-  const unit = `${force as string}/${length as string}`;
-  if (source.kind === 'line') {
-    return { ...head, title, value: load.load.startIntensity, unit, pointer: `/loads/${index}/start` };
-  }
-  const width = recorder.symbol(given.spacing === null ? 'tributary' : 'spacing');
-  const area = recorder.once(`area@${index}`, () => ({
-    ...head,
-    symbol: `p_${index + 1}`,
-    title: `${title}, on an area`,
-    value: load.area ?? 0,
-    unit: edition.unitSystem === 'metric' ? 'N/mm2' : 'psi',
-    pointer: `/loads/${index}/intensity`,
-  }));
-  const uses: Uses = { [`p_${index + 1}`]: area, width };
-  return {
-    ...head,
-    title: `${title}, per length of member`,
-    value: load.load.startIntensity,
+  const title = source.title ?? edition.actions[load.action]?.title ?? source.action;
+  const metric = edition.unitSystem === 'metric';
+  const q = `q_${index + 1}`;
+  const at = (value: number, unit: string, field: string) =>
+    entryOf('input', q, title, value, unit, {}, 'member', `/loads/${index}/${field}`);
+  if (load.load.kind === 'point') return at(load.load.force, metric ? 'N' : 'lbf', 'force');
+  if (load.load.kind === 'couple') return at(load.load.moment, metric ? 'N mm' : 'lbf in', 'moment');
+  const unit = metric ? 'N/mm' : 'lbf/in';
+  if (source.kind === 'line') return at(load.load.startIntensity, unit, 'start');
+  const p = `p_${index + 1}`;
+  const uses: Uses = { width: recorder.symbol(given.spacing === null ? 'tributary' : 'spacing') };
+  uses[p] = recorder.once(`area@${index}`, () => {
+    const pressure = metric ? 'N/mm2' : 'psi';
+    const pointer = `/loads/${index}/intensity`;
+    return entryOf('input', p, `${title}, on an area`, load.area ?? 0, pressure, {}, 'member', pointer);
+  });
+  const entry = entryOf(
+    'input',
+    q,
+    `${title}, per length of member`,
+    load.load.startIntensity,
     unit,
     uses,
-    ...recorder.formula(`p_${index + 1} * width`, uses),
-    pointer: `/loads/${index}`,
-  };
+    'member',
+    `/loads/${index}`,
+  );
+  return recorder.formula(entry, `${p} * width`);
 }
 
 /** A span of the model, with how it comes from the span as measured. */
 export function recordSpan(recorder: Recorder, span: number): number {
   return recorder.once(`span@${span}`, () => {
     const { geometry, given, edition } = recorder.context;
-    const spans = geometry?.spans[span];
-    if (!spans) throw new RangeError(`The member has no span ${span + 1}.`);
+    const found = geometry?.spans[span];
+    if (!found) throw new RangeError(`The member has no span ${span + 1}.`);
     const unit = edition.unitSystem === 'metric' ? 'mm' : 'in';
-    const name = `l_${span + 1}`;
-    const measured = (): Draft => ({
-      kind: 'input',
-      symbol: name,
-      title: `Span ${span + 1}, ${given.member.spanMeasured === 'clear' ? 'clear' : 'between centres'}`,
-      value: spans.measured,
-      unit,
-      uses: {},
-      in: 'member',
-      pointer: `/spans/${span}/length`,
-    });
-    if (spans.left === 0 && spans.right === 0 && geometry.cosine === 1) {
-      return { ...measured(), symbol: `L_${span + 1}`, title: `Span ${span + 1}` };
+    const measured = (symbol: string, title: string) =>
+      entryOf('input', symbol, title, found.measured, unit, {}, 'member', `/spans/${span}/length`);
+    const model = `L_${span + 1}`;
+    if (found.left === 0 && found.right === 0 && geometry.cosine === 1) {
+      return measured(model, `Span ${span + 1}`);
     }
-    const uses: Uses = { [name]: recorder.once(`measured@${span}`, measured) };
+    const name = `l_${span + 1}`;
+    const how = given.member.spanMeasured === 'clear' ? 'clear' : 'between centres';
+    const uses: Uses = { [name]: recorder.add(measured(name, `Span ${span + 1}, ${how}`)) };
     let formula = name;
     for (const [end, added] of [
-      ['a', spans.left],
-      ['b', spans.right],
+      ['left', found.left],
+      ['right', found.right],
     ] as const) {
       if (added === 0) continue;
       const symbol = `${end}_${span + 1}`;
-      uses[symbol] = recorder.add({
-        kind: 'input',
-        symbol,
-        title: `Added at the ${end === 'a' ? 'left' : 'right'} end of span ${span + 1}`,
-        value: added,
-        unit,
-        reference: edition.analysis.span.reference,
-        uses: {},
-        in: 'edition',
-        pointer: '/analysis/span',
-      });
+      const title = `Added at the ${end} end of span ${span + 1}`;
+      const entry = entryOf('input', symbol, title, added, unit, {}, 'edition', '/analysis/span');
+      entry.reference = edition.analysis.span.reference;
+      uses[symbol] = recorder.add(entry);
       formula += ` + ${symbol}`;
     }
     if (geometry.cosine !== 1) {
       recorder.symbols(['slope'], uses);
       formula = `(${formula}) / cos(slope * pi / 180)`;
     }
-    return {
-      kind: 'quantity',
-      symbol: `L_${span + 1}`,
-      title: `Span ${span + 1} for the analysis`,
-      value: spans.length,
-      unit,
-      reference: edition.analysis.span.reference,
-      uses,
-      ...recorder.formula(formula, uses),
-      in: 'edition',
-      pointer: '/analysis/span',
-    };
+    const title = `Span ${span + 1} for the analysis`;
+    const entry = entryOf('quantity', model, title, found.length, unit, uses, 'edition', '/analysis/span');
+    entry.reference = edition.analysis.span.reference;
+    return recorder.formula(entry, formula);
   });
 }

@@ -1,16 +1,13 @@
 import type { Context } from '../run/context.ts';
 import type { Env } from '../run/env.ts';
-import type { FormulaRun } from '../run/formula.ts';
 import type { Runtime, RunSymbol } from '../run/runtime.ts';
 import type { LedgerEntry } from '../types.ts';
 import { recordBuiltIn } from './builtIns.ts';
 import { recordClause } from './clauses.ts';
+import type { Uses } from './entry.ts';
 import { recordActionValue, recordChoice, recordGradeValue, recordInput } from './stored.ts';
 import type { Standings } from './standing.ts';
 import { substitute, type Template, templateOf, written } from './substitute.ts';
-
-export type Draft = Omit<LedgerEntry, 'n'>;
-export type Uses = Record<string, number>;
 
 /** What ledgers of one plan have in common. */
 export interface Stationery {
@@ -42,7 +39,7 @@ export class Recorder {
   }
 
   /** Entry under a key, made on first use. */
-  once(key: string, make: () => Draft): number {
+  once(key: string, make: () => LedgerEntry): number {
     const known = this.#known.get(key);
     if (known !== undefined) return known;
     const n = this.add(make());
@@ -50,10 +47,10 @@ export class Recorder {
     return n;
   }
 
-  add(draft: Draft): number {
-    const n = this.entries.length;
-    this.entries.push(Object.assign(draft, { n }));
-    return n;
+  add(entry: LedgerEntry): number {
+    entry.n = this.entries.length;
+    this.entries.push(entry);
+    return entry.n;
   }
 
   /** Entry of a symbol's value where the evaluation stands. */
@@ -70,28 +67,22 @@ export class Recorder {
     return into;
   }
 
-  /** Formula as written and with the numbers of the entries it uses. */
-  formula(text: string, uses: Readonly<Uses>): { formula: string; substituted: string } {
+  /** Sets a formula on an entry, as written and with the numbers of the entries it uses. */
+  formula(entry: LedgerEntry, text: string): LedgerEntry {
     let template = this.#templates.get(text);
     if (!template) {
       template = templateOf(text);
       this.#templates.set(text, template);
     }
-    return {
-      formula: text,
-      substituted: substitute(template, (symbol) => this.#textOf(uses[symbol], symbol)),
-    };
+    const { uses } = entry;
+    entry.formula = text;
+    entry.substituted = substitute(template, (symbol) => this.#textOf(uses[symbol], symbol));
+    return entry;
   }
 
   #textOf(n: number | undefined, symbol: string): string {
     if (n === undefined) return symbol;
     return (this.#texts[n] ??= written((this.entries[n] as LedgerEntry).value));
-  }
-
-  /** The same for a formula of the edition, whose symbols are recorded first. */
-  run(formula: FormulaRun, uses: Uses = {}): { formula: string; substituted: string; uses: Uses } {
-    this.symbols(formula.symbols, uses);
-    return { ...this.formula(formula.text, uses), uses };
   }
 
   /** What tells values of a symbol at different places apart. */
@@ -110,7 +101,7 @@ export class Recorder {
     return `@${combination?.id ?? ''}@${place?.kind ?? ''}${place?.ordinal ?? -1}`;
   }
 
-  #write(known: RunSymbol): Draft {
+  #write(known: RunSymbol): LedgerEntry {
     switch (known.origin) {
       case 'builtIn':
         return recordBuiltIn(this, known);

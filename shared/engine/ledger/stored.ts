@@ -1,116 +1,93 @@
 import type { Edition } from '#shared/basis/schema/index.ts';
 import type { RunSymbol } from '../run/runtime.ts';
-import type { Draft, Recorder } from './recorder.ts';
+import type { EntryKind, LedgerEntry } from '../types.ts';
+import { entryOf, type Uses } from './entry.ts';
+import type { Recorder } from './recorder.ts';
 
-/** What every entry of a symbol says first. */
-export function headOf(recorder: Recorder, { slot, symbol, title, unit }: RunSymbol) {
-  const problem = recorder.env.problem(slot);
-  return {
-    symbol,
-    title,
-    value: recorder.env.value(slot),
-    unit,
-    ...(problem ? { refused: problem.message } : {}),
-  };
+/** Entry of a symbol's value where the evaluation stands, or of why it has none. */
+export function symbolEntry(
+  recorder: Recorder,
+  { slot, symbol, title, unit }: RunSymbol,
+  kind: EntryKind,
+  uses: Uses,
+  where: LedgerEntry['in'],
+  pointer: string,
+): LedgerEntry {
+  const entry = entryOf(kind, symbol, title, recorder.env.value(slot), unit, uses, where, pointer);
+  if (entry.value === null) entry.refused = recorder.env.problem(slot)?.message ?? '';
+  return entry;
 }
 
 /** An option picked for the member, given by its grade, or taken as the edition's default. */
-export function recordChoice(recorder: Recorder, known: RunSymbol): Draft {
+export function recordChoice(recorder: Recorder, known: RunSymbol): LedgerEntry {
   const { edition, given } = recorder.context;
-  const choice = edition.choices[known.index] as Edition['choices'][number];
-  const head = headOf(recorder, known);
-  if (choice.scope === 'grade' && Object.hasOwn(given.grade.choices, choice.symbol)) {
-    return {
-      ...head,
-      kind: 'grade',
-      uses: {},
-      standing: recorder.standings.of(given.grade.provenance),
-      in: 'edition',
-      pointer: `/grades/rows/${given.gradeIndex}/choices/${choice.symbol}`,
-    };
+  const { scope, symbol } = edition.choices[known.index] as Edition['choices'][number];
+  if (scope === 'grade' && Object.hasOwn(given.grade.choices, symbol)) {
+    const pointer = `/grades/rows/${given.gradeIndex}/choices/${symbol}`;
+    const entry = symbolEntry(recorder, known, 'grade', {}, 'edition', pointer);
+    entry.standing = recorder.standings.of(given.grade.provenance);
+    return entry;
   }
-  const picked = choice.scope !== 'grade' && Object.hasOwn(given.member.choices, choice.symbol);
-  return {
-    ...head,
-    kind: 'input',
-    uses: {},
-    ...(picked
-      ? { in: 'member', pointer: `/choices/${choice.symbol}` }
-      : { in: 'edition', pointer: `/choices/${known.index}/default` }),
-  };
+  const picked = scope !== 'grade' && Object.hasOwn(given.member.choices, symbol);
+  return picked
+    ? symbolEntry(recorder, known, 'input', {}, 'member', `/choices/${symbol}`)
+    : symbolEntry(recorder, known, 'input', {}, 'edition', `/choices/${known.index}/default`);
 }
 
 /** A number entered for the member, a span or a support, or the edition's default. */
-export function recordInput(recorder: Recorder, known: RunSymbol): Draft {
+export function recordInput(recorder: Recorder, known: RunSymbol): LedgerEntry {
   const { edition, given, place } = recorder.context;
-  const input = edition.inputs[known.index] as Edition['inputs'][number];
+  const { scope, symbol } = edition.inputs[known.index] as Edition['inputs'][number];
   const { member } = given;
-  const [record, base, label] =
-    input.scope === 'member'
-      ? [member.inputs, '/inputs', '']
-      : input.scope === 'span'
-        ? [
-            member.spans[place?.span ?? 0]?.inputs,
-            `/spans/${place?.span ?? 0}/inputs`,
-            `, span ${(place?.span ?? 0) + 1}`,
-          ]
-        : [
-            member.supports[place?.node ?? 0]?.inputs,
-            `/supports/${place?.node ?? 0}/inputs`,
-            `, support ${(place?.node ?? 0) + 1}`,
-          ];
-  const entered = record !== undefined && Object.hasOwn(record, input.symbol);
-  const head = headOf(recorder, known);
-  return {
-    ...head,
-    kind: 'input',
-    title: `${head.title}${label}`,
-    uses: {},
-    ...(entered
-      ? { in: 'member', pointer: `${base}/${input.symbol}` }
-      : { in: 'edition', pointer: `/inputs/${known.index}/default` }),
-  };
+  let record: Readonly<Record<string, number>> | undefined = member.inputs;
+  let base = '/inputs';
+  let label = '';
+  if (scope === 'span') {
+    const span = place?.span ?? 0;
+    record = member.spans[span]?.inputs;
+    base = `/spans/${span}/inputs`;
+    label = `, span ${span + 1}`;
+  } else if (scope === 'support') {
+    const node = place?.node ?? 0;
+    record = member.supports[node]?.inputs;
+    base = `/supports/${node}/inputs`;
+    label = `, support ${node + 1}`;
+  }
+  const entered = record !== undefined && Object.hasOwn(record, symbol);
+  const entry = entered
+    ? symbolEntry(recorder, known, 'input', {}, 'member', `${base}/${symbol}`)
+    : symbolEntry(recorder, known, 'input', {}, 'edition', `/inputs/${known.index}/default`);
+  entry.title += label;
+  return entry;
 }
 
 /** A value of the grade table. */
-export function recordGradeValue(recorder: Recorder, known: RunSymbol): Draft {
+export function recordGradeValue(recorder: Recorder, known: RunSymbol): LedgerEntry {
   const { grade, gradeIndex } = recorder.context.given;
-  const cell = Object.hasOwn(grade.values, known.symbol) ? grade.values[known.symbol] : undefined;
-  const provenance = grade.cells?.[known.symbol] ?? grade.provenance;
-  const draft: Draft = {
-    ...headOf(recorder, known),
-    kind: 'grade',
-    uses: {},
-    standing: recorder.standings.of(provenance),
-    in: 'edition',
-    pointer: `/grades/rows/${gradeIndex}/values/${known.symbol}`,
-  };
-  if (typeof cell !== 'object') return draft;
-  const by = recorder.symbol(cell.by);
-  const size = recorder.entries[by]?.value ?? null;
-  return {
-    ...draft,
-    uses: { [cell.by]: by },
-    lookup: {
-      table: grade.title,
-      keys: size === null ? [] : [size],
-      found: `the band of ${cell.by} it falls in`,
-    },
-  };
+  const { symbol } = known;
+  const cell = Object.hasOwn(grade.values, symbol) ? grade.values[symbol] : undefined;
+  const uses: Uses = {};
+  if (typeof cell === 'object') uses[cell.by] = recorder.symbol(cell.by);
+  const pointer = `/grades/rows/${gradeIndex}/values/${symbol}`;
+  const entry = symbolEntry(recorder, known, 'grade', uses, 'edition', pointer);
+  entry.standing = recorder.standings.of(grade.cells?.[symbol] ?? grade.provenance);
+  if (typeof cell === 'object') {
+    const size = recorder.entries[uses[cell.by] as number]?.value ?? null;
+    const found = `the band of ${cell.by} it falls in`;
+    entry.lookup = { table: grade.title, keys: size === null ? [] : [size], found };
+  }
+  return entry;
 }
 
 /** A number that an action carries for the combinations. */
-export function recordActionValue(recorder: Recorder, known: RunSymbol): Draft {
+export function recordActionValue(recorder: Recorder, known: RunSymbol): LedgerEntry {
   const { edition, action } = recorder.context;
+  const pointer = `/actions/${action}/values/${known.symbol}`;
+  const entry = symbolEntry(recorder, known, 'action', {}, 'edition', pointer);
   const carrying = edition.actions[action];
-  const head = headOf(recorder, known);
-  return {
-    ...head,
-    kind: 'action',
-    title: `${head.title}: ${carrying?.title ?? ''}`,
-    uses: {},
-    ...(carrying ? { standing: recorder.standings.of(carrying.provenance) } : {}),
-    in: 'edition',
-    pointer: `/actions/${action}/values/${known.symbol}`,
-  };
+  if (carrying) {
+    entry.title += `: ${carrying.title}`;
+    entry.standing = recorder.standings.of(carrying.provenance);
+  }
+  return entry;
 }

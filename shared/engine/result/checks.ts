@@ -5,7 +5,8 @@ import type { ExpandedCombination } from '../combine/expand.ts';
 import { evaluate, type FormulaRun } from '../run/formula.ts';
 import type { RunCheck } from '../run/runtime.ts';
 import { placeName } from '../ledger/places.ts';
-import type { Draft, Recorder, Uses } from '../ledger/recorder.ts';
+import { entryOf, type Uses } from '../ledger/entry.ts';
+import type { Recorder } from '../ledger/recorder.ts';
 import type { CheckResult, Choosing, Instance } from '../types.ts';
 import { evidenceOf } from '../decide/evidence.ts';
 import { utilisationOf, wordOf } from './judge.ts';
@@ -81,32 +82,33 @@ function recordCheck(
   const { context } = recorder;
   const where = place ? placeName(place, context.geometry?.nodes.length ?? 0) : '';
   const parts = [where, combination?.title].filter(Boolean).join(', ');
-  const head = {
-    kind: 'check',
-    symbol: 'U',
-    title: `${check.check.title}: utilisation${parts ? `, ${parts}` : ''}`,
-    value: utilisationOf(assessment),
-    unit: '1',
-    reference: check.check.reference,
-    clause: check.check.id,
-    in: 'edition',
-    pointer: `/checks/${check.index}`,
-  } as const;
+  const entry = entryOf(
+    'check',
+    'U',
+    `${check.check.title}: utilisation${parts ? `, ${parts}` : ''}`,
+    utilisationOf(assessment),
+    '1',
+    {},
+    'edition',
+    `/checks/${check.index}`,
+  );
+  entry.reference = check.check.reference;
+  entry.clause = check.check.id;
   const problem =
-    assessment.refused?.problem ?? (head.value === null ? assessment.unanswered?.problem : undefined);
-  const refused = problem ? { refused: problem.message } : {};
+    assessment.refused?.problem ?? (entry.value === null ? assessment.unanswered?.problem : undefined);
+  if (problem) entry.refused = problem.message;
   // Without a place there is nothing to read: the factors of the combination themselves have no value.
-  if (!place && check.kind !== 'member') return recorder.add({ ...head, ...refused, uses: {} });
-  const uses: Uses = {};
+  if (!place && check.kind !== 'member') return recorder.add(entry);
+  const { uses } = entry;
   const choosing = recordApplies(recorder, check, uses);
-  const chosen = choosing ? { choosing } : {};
+  if (choosing) entry.choosing = choosing;
   if (check.utilisation) {
-    const written = recorder.run(check.utilisation, uses);
-    return recorder.add({ ...head, ...refused, ...chosen, ...written });
+    recorder.symbols(check.utilisation.symbols, uses);
+    return recorder.add(recorder.formula(entry, check.utilisation.text));
   }
   uses['demand'] = recordPart(recorder, check, 'demand');
   uses['limit'] = recordPart(recorder, check, 'limit');
-  return recorder.add({ ...head, ...refused, ...chosen, uses, ...recorder.formula('demand / limit', uses) });
+  return recorder.add(recorder.formula(entry, 'demand / limit'));
 }
 
 function recordPart(recorder: Recorder, check: RunCheck, which: 'demand' | 'limit'): number {
@@ -114,19 +116,19 @@ function recordPart(recorder: Recorder, check: RunCheck, which: 'demand' | 'limi
   const head = check.check[which];
   if (!formula || !head) throw new RangeError(`Check ${check.check.id} has no ${which}.`);
   const value = evaluate(formula, recorder.env);
-  const draft: Draft = {
-    kind: which === 'demand' ? 'quantity' : 'limit',
-    symbol: which,
-    title: head.title,
-    value: Number.isNaN(value) ? null : value,
-    unit: head.unit,
-    reference: check.check.reference,
-    clause: check.check.id,
-    ...recorder.run(formula),
-    in: 'edition',
-    pointer: `/checks/${check.index}/${which}/formula`,
-  };
-  return recorder.add(draft);
+  const entry = entryOf(
+    which === 'demand' ? 'quantity' : 'limit',
+    which,
+    head.title,
+    Number.isNaN(value) ? null : value,
+    head.unit,
+    recorder.symbols(formula.symbols),
+    'edition',
+    `/checks/${check.index}/${which}/formula`,
+  );
+  entry.reference = check.check.reference;
+  entry.clause = check.check.id;
+  return recorder.add(recorder.formula(entry, formula.text));
 }
 
 function recordApplies(recorder: Recorder, check: RunCheck, uses: Uses): Choosing | null {
