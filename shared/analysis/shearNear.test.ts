@@ -72,6 +72,12 @@ describe('point loads within the distance', () => {
     expect(shearOf([over], left, { ...rule, from: 'face', pointLoads: 'scale' })).toBeCloseTo(0, 12);
   });
 
+  it('within the distance from the face, though not from the centre, are within', () => {
+    const near: BeamLoad = { kind: 'point', x: 0.22, force: 8 };
+    expect(shearOf([near], left, { ...rule, from: 'face', pointLoads: 'omit' })).toBeCloseTo(0, 12);
+    expect(shearOf([near], left, { ...rule, pointLoads: 'omit' })).toBeCloseTo(8 * (1 - 0.22 / 4), 12);
+  });
+
   it('upwards are left out as well, so that they relieve nothing', () => {
     const up: BeamLoad = { kind: 'point', x: 0.1, force: -8 };
     expect(shearOf([line, up], left, { ...rule, pointLoads: 'omit' })).toBeCloseTo(5.4, 12);

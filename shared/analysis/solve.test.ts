@@ -95,6 +95,15 @@ describe('loads at nodes', () => {
     expect(reactions).toEqual([-2, 2]);
   });
 
+  it('no rounding is left of the moment at a pinned end or at the tip of an overhang', () => {
+    const beam: Beam = { spans: [3.1, 4.7, 2.3], restraints: ['pin', 'pin', 'pin', 'pin'], EI: 7 };
+    const { moment } = effectsOf(beam, [uniform(1.7, 0, 10.1)]);
+    expect(moment[0]?.coefficients[0]).toBe(0);
+    const tip: Beam = { ...beam, restraints: ['free', 'pin', 'pin', 'pin'] };
+    const { shear, moment: overhang } = effectsOf(tip, [uniform(1.7, 0, 10.1)]);
+    expect([shear[0]?.coefficients[0], overhang[0]?.coefficients[0]]).toEqual([0, 0]);
+  });
+
   it('a couple at an inner support is shared by the spans as they are stiff: 3 EI / L', () => {
     const { moment } = effectsOf(two, [{ kind: 'couple', x: 3, moment: 7 }]);
     expect(valueAt(moment, 3, 'right') - valueAt(moment, 3, 'left')).toBeCloseTo(7, 12);
@@ -123,13 +132,39 @@ describe('loads at nodes', () => {
   it('places that differ from a node by rounding only count as the node', () => {
     const beam: Beam = { spans: [0.1, 0.2], restraints: ['pin', 'pin', 'pin'], EI: 1 };
     for (const x of [0.1 + 0.2, 0.3]) {
-      const { reactions } = effectsOf(beam, [{ kind: 'point', x, force: 3 }]);
-      expect(reactions[2]).toBeCloseTo(3, 12);
+      const { reactions, moment } = effectsOf(beam, [{ kind: 'point', x, force: 3 }]);
+      expect(reactions).toEqual([0, 0, 3]);
+      expect(moment).toHaveLength(2);
+    }
+    for (const x of [0.1 - 1e-16, 0.1 + 1e-16]) {
+      const { reactions, moment } = effectsOf(beam, [{ kind: 'point', x, force: 3 }]);
+      expect(reactions).toEqual([0, 3, 0]);
+      expect(moment).toHaveLength(2);
     }
   });
 });
 
 describe('load that is easily lost', () => {
+  it('several loads at one place make one break, and all count', () => {
+    const { shear, moment } = effectsOf(simple, [
+      { kind: 'point', x: 1, force: 4 },
+      { kind: 'point', x: 1, force: 4 },
+      { kind: 'couple', x: 1, moment: 2 },
+      uniform(3, 1, 4),
+    ]);
+    expect(shear).toHaveLength(2);
+    expect(valueAt(shear, 1, 'left') - valueAt(shear, 1, 'right')).toBeCloseTo(8, 12);
+    expect(valueAt(moment, 1, 'right') - valueAt(moment, 1, 'left')).toBeCloseTo(2, 12);
+  });
+
+  it('a line load shorter than the rounding of places', () => {
+    const to = 1.3 + 2e-14;
+    const { reactions } = effectsOf(simple, [uniform(1e15, 1.3, to)]);
+    const force = 1e15 * (to - 1.3);
+    expect((reactions[0] ?? NaN) / (force * (2.7 / 4))).toBeCloseTo(1, 10);
+    expect((reactions[1] ?? NaN) / (force * (1.3 / 4))).toBeCloseTo(1, 10);
+  });
+
   it.each([
     ['a sliver of line load in a span', uniform(1e13, 1.3, 1.3 + 1e-12), 10],
     ['a sliver at the end', uniform(1e13, 4 - 1e-12, 4), 10],
