@@ -189,7 +189,7 @@ export function rowsFor(examples: Examples, comparisons: readonly Comparison[]):
     const found = [...examples.published, ...examples.constructed].find(({ id }) => id === example);
     if (!found) throw new Error(`No example ${example}.`);
     const figure = figureOf(found, quantity);
-    const printed = figure?.printed?.match(/[\d,]*\.?\d+/)?.[0].replaceAll(',', '');
+    const printed = figure?.printed?.match(/-?[\d,]*\.?\d+/)?.[0].replaceAll(',', '');
     const recomputed = figure?.recomputed === undefined ? undefined : String(figure.recomputed);
     const text = expected === undefined ? (printed ?? recomputed) : String(expected);
     if (text === undefined) throw new Error(`Nothing to compare ${example} ${quantity} with.`);
