@@ -32,6 +32,14 @@ describe('the sheet of a member', () => {
     expect(sheet.future).toEqual([]);
   });
 
+  it('takes typing on in one field for one step', () => {
+    let sheet = openSheet(member, 1);
+    for (const value of [4, 42, 420, 4200]) {
+      sheet = sheetAfter(sheet, { kind: 'set', pointer: '/spans/0/length', value });
+    }
+    expect(sheetAfter(sheet, { kind: 'undo' }).document.spans[0]?.length).toBe(3600);
+  });
+
   it('keeps unreadable text with its message until the field is read again', () => {
     let sheet = openSheet(member, 1);
     sheet = sheetAfter(sheet, {

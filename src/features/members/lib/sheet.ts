@@ -12,6 +12,8 @@ export interface Sheet {
   past: readonly Member[];
   future: readonly Member[];
   unread: Unread;
+  /** Field of the last change: typing on in one field is one step of undo. */
+  field: string | null;
 }
 
 export type SheetEvent =
@@ -27,7 +29,7 @@ export type SheetEvent =
 const depth = 200;
 
 export function openSheet(document: Member, version: number): Sheet {
-  return { document, saved: { document, version }, past: [], future: [], unread: {} };
+  return { document, saved: { document, version }, past: [], future: [], unread: {}, field: null };
 }
 
 /** Whether there is anything that the server doesn't have. */
@@ -35,9 +37,11 @@ export function isChanged(sheet: Sheet): boolean {
   return sheet.document !== sheet.saved.document || Object.keys(sheet.unread).length > 0;
 }
 
-function stepped(sheet: Sheet, document: Member, unread: Unread): Sheet {
+function stepped(sheet: Sheet, document: Member, unread: Unread, field: string | null): Sheet {
   if (document === sheet.document) return { ...sheet, unread };
-  return { ...sheet, document, unread, past: [...sheet.past, sheet.document].slice(-depth), future: [] };
+  const past =
+    field !== null && field === sheet.field ? sheet.past : [...sheet.past, sheet.document].slice(-depth);
+  return { ...sheet, document, unread, past, future: [], field };
 }
 
 function without(unread: Unread, pointer: string): Unread {
@@ -52,9 +56,10 @@ export function sheetAfter(sheet: Sheet, event: SheetEvent): Sheet {
         sheet,
         withValue(sheet.document, event.pointer, event.value),
         without(sheet.unread, event.pointer),
+        event.pointer,
       );
     case 'replace':
-      return stepped(sheet, event.document, {});
+      return stepped(sheet, event.document, {}, null);
     case 'unreadable':
       return {
         ...sheet,
@@ -67,6 +72,7 @@ export function sheetAfter(sheet: Sheet, event: SheetEvent): Sheet {
         ...sheet,
         document,
         unread: {},
+        field: null,
         past: sheet.past.slice(0, -1),
         future: [sheet.document, ...sheet.future],
       };
@@ -74,7 +80,7 @@ export function sheetAfter(sheet: Sheet, event: SheetEvent): Sheet {
     case 'redo': {
       const [document, ...future] = sheet.future;
       if (!document) return sheet;
-      return { ...sheet, document, unread: {}, past: [...sheet.past, sheet.document], future };
+      return { ...sheet, document, unread: {}, field: null, past: [...sheet.past, sheet.document], future };
     }
     case 'saved':
       return {
@@ -83,6 +89,6 @@ export function sheetAfter(sheet: Sheet, event: SheetEvent): Sheet {
         saved: { document: event.document, version: event.version },
       };
     case 'rebase':
-      return { ...stepped(sheet, event.document, sheet.unread), saved: event.saved };
+      return { ...stepped(sheet, event.document, sheet.unread, null), saved: event.saved };
   }
 }
