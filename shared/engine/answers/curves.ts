@@ -80,7 +80,7 @@ function sampled(
   { key, terms, name }: (typeof effects)[number],
   { piece, within }: Places,
 ): number[] {
-  const sum = new Float64Array(situation.model.unitSelfWeight[key].length);
+  const sum = new Float64Array(situation.model.unitSelfWeight.grid[key].length);
   superpose(situation, combination, arrangement, key, sum);
   const scale = name === 'w' ? (situation.flexibility ?? 0) : 1;
   return piece.map((k, i) => valueOf(sum, k * terms, terms, within[i] as number) * scale);

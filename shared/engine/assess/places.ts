@@ -68,7 +68,7 @@ export class PlaceVisitor {
 
   /** Moment along the member in one arrangement; for the length between points of zero moment. */
   momentSum(combination: ExpandedCombination, arrangement: number): Float64Array {
-    this.aside ??= new Float64Array(this.situation.model.unitSelfWeight.moment.length);
+    this.aside ??= new Float64Array(this.situation.model.unitSelfWeight.grid.moment.length);
     superpose(this.situation, combination, arrangement, 'moment', this.aside);
     return this.aside;
   }
@@ -84,7 +84,7 @@ export class PlaceVisitor {
   /** Fills one buffer per arrangement; returns how many. */
   private superposeAll(combination: ExpandedCombination, key: 'moment' | 'deflection'): number {
     const count = arrangementCount(this.situation, combination);
-    const { length } = this.situation.model.unitSelfWeight[key];
+    const { length } = this.situation.model.unitSelfWeight.grid[key];
     for (let a = 0; a < count; a += 1) superpose(this.situation, combination, a, key, this.buffer(a, length));
     return count;
   }

@@ -1,7 +1,8 @@
+import { shearNear } from '#shared/analysis/shearNear.ts';
 import type { BeamLoad } from '#shared/analysis/types.ts';
 import type { ExpandedCombination } from '../combine/expand.ts';
 import { addTo, type GridCase, type Grid, MOMENT_TERMS, SHEAR_TERMS, valueAt } from '../effects/grid.ts';
-import type { Model } from '../effects/model.ts';
+import type { Model, ModelCase } from '../effects/model.ts';
 
 /** How shear is taken near a support, with the distance worked out. */
 export type ShearRule =
@@ -40,7 +41,7 @@ export interface Situation {
 /** Puts section and self-weight into a model. */
 export function situate(
   model: Model,
-  natures: (action: number) => boolean,
+  isVariable: (action: number) => boolean,
   selfWeight: { action: number; line: number } | null,
   flexibility: number | null,
   rule: ShearRule,
@@ -49,33 +50,33 @@ export function situate(
   const carried = [...model.casesOf.keys()];
   if (selfWeight && !carried.includes(selfWeight.action)) carried.push(selfWeight.action);
   carried.sort((a, b) => a - b);
+  const unit = { ...model.unitSelfWeight, nodal: nodalShear(model, model.unitSelfWeight, rule, bearings) };
   const actions = carried.map((action): ActionEffects => {
-    let cases = model.casesOf.get(action) ?? [];
-    let loads = model.loadsOf.get(action) ?? [];
-    if (selfWeight?.action === action) {
-      const { line } = selfWeight;
-      const own = model.unitSelfWeightLoads.map((load) => scaled(load, line));
-      cases = cases.length
-        ? cases.map((each) => withSelfWeight(model, each, line))
-        : [withSelfWeight(model, null, line)];
-      loads = loads.length ? loads.map((each) => [...each, ...own]) : [own];
-    }
+    const line = selfWeight?.action === action ? selfWeight.line : null;
+    const own = model.casesOf.get(action) ?? [];
+    const cases = own.length ? own : [null];
+    const weight = line === null ? [] : unit.loads.map((load) => scaled(load, line));
     return {
       action,
-      variable: natures(action),
-      cases,
-      loads,
-      nodal: cases.map((each, i) => nodalShear(model, each, loads[i] ?? [], rule, bearings)),
+      variable: isVariable(action),
+      cases: cases.map((each) =>
+        line === null && each ? each.grid : withWeight(unit.grid, each?.grid, line ?? 0),
+      ),
+      loads: cases.map((each) => [...(each?.loads ?? []), ...weight]),
+      nodal: cases.map((each) => {
+        const typed = each && nodalShear(model, each, rule, bearings);
+        return line === null && typed ? typed : addNodal(typed, unit.nodal, line ?? 0);
+      }),
     };
   });
   return { model, grid: model.grid, actions, flexibility, reduced: rule.at === 'distance' };
 }
 
 /** A case with self-weight of a given size added. */
-function withSelfWeight(model: Model, base: GridCase | null, line: number): GridCase {
-  const unit = model.unitSelfWeight;
+function withWeight(unit: GridCase, base: GridCase | undefined, line: number): GridCase {
   const sum = (key: 'shear' | 'moment' | 'deflection') => {
-    const out = base ? base[key].slice() : new Float64Array(unit[key].length);
+    const out = new Float64Array(unit[key].length);
+    if (base) addTo(out, base[key], 1);
     addTo(out, unit[key], line);
     return out;
   };
@@ -92,14 +93,26 @@ function scaled(load: BeamLoad, by: number): BeamLoad {
   return { ...load, startIntensity: load.startIntensity * by, endIntensity: load.endIntensity * by };
 }
 
+function addNodal(base: NodalShear | null, unit: NodalShear, line: number): NodalShear {
+  const sum = (key: keyof NodalShear) => {
+    const out = new Float64Array(unit[key].length);
+    if (base) addTo(out, base[key], 1);
+    addTo(out, unit[key], line);
+    return out;
+  };
+  const left = sum('left');
+  const right = sum('right');
+  if (unit.reducedLeft === unit.left) return { left, right, reducedLeft: left, reducedRight: right };
+  return { left, right, reducedLeft: sum('reducedLeft'), reducedRight: sum('reducedRight') };
+}
+
+/** Shear beside each support, as it is and by the edition's rule. */
 function nodalShear(
-  model: Model,
-  { shear }: GridCase,
-  loads: readonly BeamLoad[],
+  { grid, geometry, beam, solver }: Model,
+  { grid: { shear }, effects, loads }: ModelCase,
   rule: ShearRule,
   bearings: readonly (number | null)[],
 ): NodalShear {
-  const { grid, geometry } = model;
   const nodes = geometry.nodes.length;
   const left = new Float64Array(nodes);
   const right = new Float64Array(nodes);
@@ -110,54 +123,15 @@ function nodalShear(
     if (node < nodes - 1) right[node] = valueAt(grid, shear, SHEAR_TERMS, first, x);
   }
   if (rule.at === 'support') return { left, right, reducedLeft: left, reducedRight: right };
-  const reducedLeft = left.slice();
-  const reducedRight = right.slice();
+  const analysed = { spans: beam.spans, solver, loads, effects };
+  const reducedLeft = new Float64Array(nodes);
+  const reducedRight = new Float64Array(nodes);
   for (let node = 0; node < nodes; node += 1) {
-    const face = rule.from === 'face' ? (bearings[node] ?? 0) / 2 : 0;
-    const distance = rule.distance + face;
-    if (node > 0) reducedLeft[node] = reducedShear(model, shear, loads, node, -1, distance, rule.pointLoads);
-    if (node < nodes - 1) {
-      reducedRight[node] = reducedShear(model, shear, loads, node, 1, distance, rule.pointLoads);
-    }
+    const toFace = (bearings[node] ?? 0) / 2;
+    if (node > 0) reducedLeft[node] = shearNear(analysed, { node, side: 'left', toFace }, rule);
+    if (node < nodes - 1) reducedRight[node] = shearNear(analysed, { node, side: 'right', toFace }, rule);
   }
   return { left, right, reducedLeft, reducedRight };
-}
-
-/**
- * Shear at a distance from a node, with point loads inside the distance kept, left out, or counted in
- * proportion to their distance. Not reduced where the distance reaches the next node.
- */
-function reducedShear(
-  { grid, geometry }: Model,
-  shear: Float64Array,
-  loads: readonly BeamLoad[],
-  node: number,
-  direction: 1 | -1,
-  distance: number,
-  pointLoads: 'keep' | 'omit' | 'scale',
-): number {
-  const support = geometry.nodes[node] as number;
-  const span = direction > 0 ? node : node - 1;
-  const spanLength = (geometry.nodes[span + 1] as number) - (geometry.nodes[span] as number);
-  const first = grid.firstOfSpan[span] as number;
-  const last = (grid.firstOfSpan[span + 1] as number) - 1;
-  if (distance >= spanLength || distance <= 0) {
-    return valueAt(grid, shear, SHEAR_TERMS, direction > 0 ? first : last, support);
-  }
-  const x = support + direction * distance;
-  let piece = direction > 0 ? first : last;
-  while (direction > 0 ? (grid.breaks[piece + 1] as number) <= x : (grid.breaks[piece] as number) >= x) {
-    piece += direction;
-  }
-  let value = valueAt(grid, shear, SHEAR_TERMS, piece, x);
-  if (pointLoads === 'omit') return value;
-  for (const load of loads) {
-    if (load.kind !== 'point') continue;
-    const away = (load.x - support) * direction;
-    if (away <= 0 || away > distance) continue;
-    value += direction * load.force * (pointLoads === 'scale' ? away / distance : 1);
-  }
-  return value;
 }
 
 /** Sum of moments (or deflections) of a combination in one arrangement, into a buffer. */

@@ -1,5 +1,5 @@
 import { arrangements, clipToSpans } from '#shared/analysis/arrangements.ts';
-import { prepare } from '#shared/analysis/solve.ts';
+import { prepare, type Solver } from '#shared/analysis/solve.ts';
 import type { AnalysisProblem, Beam, BeamLoad, Effects } from '#shared/analysis/types.ts';
 import type { Geometry } from '../member/geometry.ts';
 import { type Grid, type GridCase, toGrid } from './grid.ts';
@@ -18,13 +18,18 @@ export interface Model {
   grid: Grid;
   /** Spans loaded in each arrangement of the patterned actions; the first has all of them. */
   arrangements: readonly (readonly number[])[];
-  /** Cases by action, one per arrangement for a patterned action, else one. */
-  casesOf: ReadonlyMap<number, readonly GridCase[]>;
+  solver: Solver;
+  /** By action, one per arrangement for a patterned action, else one. */
+  casesOf: ReadonlyMap<number, readonly ModelCase[]>;
   /** Self-weight of 1 per unit length, vertical, along the whole member. */
-  unitSelfWeight: GridCase;
-  /** The loads behind each case, for shear near the supports. */
-  loadsOf: ReadonlyMap<number, readonly (readonly BeamLoad[])[]>;
-  unitSelfWeightLoads: readonly BeamLoad[];
+  unitSelfWeight: ModelCase;
+}
+
+/** One set of loads and what it does. */
+export interface ModelCase {
+  loads: readonly BeamLoad[];
+  effects: Effects;
+  grid: GridCase;
 }
 
 export type ModelOutcome = { ok: true; model: Model } | { ok: false; problems: readonly AnalysisProblem[] };
@@ -54,28 +59,35 @@ export function buildModel(
   const unitSelfWeightLoads: BeamLoad[] = [
     { kind: 'line', from: 0, to: total, startIntensity: geometry.cosine, endIntensity: geometry.cosine },
   ];
-  const loadsOf = new Map<number, readonly (readonly BeamLoad[])[]>();
+  const sets = new Map<number, readonly (readonly BeamLoad[])[]>();
   for (const { action, patterned: byPattern, loads } of actions) {
-    loadsOf.set(
+    sets.set(
       action,
       byPattern && patterned
         ? subsets.map((subset, i) => (i === 0 ? loads : clipToSpans(loads, beam, subset)))
         : [loads],
     );
   }
+  const all = [unitSelfWeightLoads, ...[...sets.values()].flat()];
   const effects: Effects[] = [];
-  for (const loads of [unitSelfWeightLoads, ...[...loadsOf.values()].flat()]) {
+  for (const loads of all) {
     const outcome = prepared.solver.solve(loads);
     if (!outcome.ok) return { ok: false, problems: outcome.problems };
     effects.push(outcome.effects);
   }
   const grid = toGrid(geometry.nodes, effects);
-  const casesOf = new Map<number, readonly GridCase[]>();
+  const cases = all.map((loads, i): ModelCase => ({
+    loads,
+    effects: effects[i] as Effects,
+    grid: grid.cases[i] as GridCase,
+  }));
+  const casesOf = new Map<number, readonly ModelCase[]>();
   let next = 1;
-  for (const [action, cases] of loadsOf) {
-    casesOf.set(action, grid.cases.slice(next, next + cases.length));
-    next += cases.length;
+  for (const [action, { length }] of sets) {
+    casesOf.set(action, cases.slice(next, next + length));
+    next += length;
   }
+  const unitSelfWeight = cases[0] as ModelCase;
   return {
     ok: true,
     model: {
@@ -83,10 +95,9 @@ export function buildModel(
       geometry,
       grid,
       arrangements: subsets,
+      solver: prepared.solver,
       casesOf,
-      unitSelfWeight: grid.cases[0] as GridCase,
-      loadsOf,
-      unitSelfWeightLoads,
+      unitSelfWeight,
     },
   };
 }
