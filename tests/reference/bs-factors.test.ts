@@ -146,6 +146,12 @@ describe('factors of the starter edition, each against the value by hand', () =>
     expect(limit(changed({}, { held }), 'proportions')).toBe(expected);
   });
 
+  it('counts pieces side by side together against turning over only where they act as one', () => {
+    const pair = { section: { b: 47, h: 195, pieces: 2 } };
+    expect(demand(changed(pair), 'proportions')).toBeCloseTo(195 / 47, 12);
+    expect(demand(changed(pair, { load_sharing: 'built-up' }), 'proportions')).toBeCloseTo(195 / 94, 12);
+  });
+
   it.each([
     ['general', 3600, 10.8],
     ['general', 6000, 18],
