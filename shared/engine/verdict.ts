@@ -1,5 +1,6 @@
 import type { Assessment } from './assess/assess.ts';
-import { type ModelMemo, stand } from './assess/stand.ts';
+import type { ModelMemo } from './assess/modelMemo.ts';
+import { stand } from './assess/stand.ts';
 import { inOrder, judge, type Judgement, utilisationOf, wordOf } from './result/judge.ts';
 import { preparedOf } from './runtimes.ts';
 import type { Finding, Member, Plan, VerdictWord } from './types.ts';

@@ -1,4 +1,4 @@
-import type { ModelMemo } from '../assess/stand.ts';
+import { ModelMemo } from '../assess/modelMemo.ts';
 import type { FoundSection, Member, Plan, StockSection } from '../types.ts';
 import { type QuickVerdict, verdict } from '../verdict.ts';
 
@@ -27,7 +27,7 @@ const SAME = 1e-6;
  * there is none.
  */
 export function nextInStock(plan: Plan, member: Member, stock: readonly StockSection[]): StockSection | null {
-  const memo: ModelMemo = { key: '', model: null };
+  const memo = new ModelMemo();
   const fitting = stock
     .filter(
       (section) =>
@@ -59,7 +59,7 @@ export function* sectionSearch(
   { stock, grades, rank }: FindOptions,
 ): Generator<number, FoundSection[]> {
   const tried = grades ?? plan.edition.grades.rows.map(({ id }) => id);
-  const memo: ModelMemo = { key: '', model: null };
+  const memo = new ModelMemo();
   const found: FoundSection[] = [];
   const total = stock.length * tried.length;
   let done = 0;

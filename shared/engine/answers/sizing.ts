@@ -1,4 +1,4 @@
-import type { ModelMemo } from '../assess/stand.ts';
+import { ModelMemo } from '../assess/modelMemo.ts';
 import { ROUNDING } from '../assess/assess.ts';
 import type { Member, Plan, RequiredDepth } from '../types.ts';
 import { type QuickVerdict, verdict } from '../verdict.ts';
@@ -29,7 +29,7 @@ export function requiredDepth(plan: Plan, member: Member): RequiredDepth {
   const { units } = member;
   const step = STEP[units];
   const count = Math.round(DEEPEST[units] / step);
-  const memo: ModelMemo = { key: '', model: null };
+  const memo = new ModelMemo();
   const at = (depth: number) => trialAt(plan, member, depth, memo);
   const whole: (Trial | undefined)[] = [];
   const atStep = (n: number): Trial => (whole[n] ??= at(n * step));

@@ -13,13 +13,8 @@ import type { Runtime } from '../run/runtime.ts';
 import { atTerm, leaveTerm } from '../run/terms.ts';
 import type { Finding } from '../types.ts';
 import { assess, type Assessment, atMember } from './assess.ts';
+import type { ModelMemo } from './modelMemo.ts';
 import { type ShearRule, situate } from './situation.ts';
-
-/** The last model analysed, kept for the next member with the same spans and loads (a section search). */
-export interface ModelMemo {
-  key: string;
-  model: Model | null;
-}
 
 /** A member assessed: everything that results are drawn from. */
 export interface Standing {
@@ -196,9 +191,15 @@ function stiffnessOf(
   if (shearStiffness === undefined) return { flexibility: EI && 1 / EI, ratio: null };
   const shear = memberValue(runtime, env, shearStiffness);
   const GA = shear.ok && isStiffness(shear.value) ? shear.value : null;
-  if (EI !== null && GA !== null) return { flexibility: 1 / EI, ratio: GA / EI };
+  if (EI !== null && GA !== null) return { flexibility: 1 / EI, ratio: withoutTrace(GA / EI) };
   return { flexibility: null, ratio: isDeterminate(given) ? null : 'needed' };
 }
+
+/**
+ * A ratio without the trace that rounding leaves in its last digits: grades whose shear modulus is the same
+ * share of E have the same ratio, and so the same analysis.
+ */
+const withoutTrace = (ratio: number) => Number(ratio.toPrecision(13));
 
 /** A stiffness that can be calculated with. */
 const isStiffness = (value: number) => value > 1 / LARGEST && value < LARGEST ** 2;
@@ -229,8 +230,8 @@ function analyse(
       ],
     };
   }
-  const key = memo ? JSON.stringify([geometry, given.restraints, actions, ratio]) : '';
-  if (memo?.model && memo.key === key) return { ok: true, model: memo.model };
+  const known = memo?.recall(given.member, geometry, ratio);
+  if (known) return { ok: true, model: known };
   const built = buildModel(geometry, given.restraints, actions, ratio);
   if (!built.ok) {
     return {
@@ -240,10 +241,7 @@ function analyse(
       ),
     };
   }
-  if (memo) {
-    memo.key = key;
-    memo.model = built.model;
-  }
+  memo?.keep(given.member, geometry, ratio, built.model);
   return { ok: true, model: built.model };
 }
 
