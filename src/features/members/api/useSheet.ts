@@ -1,8 +1,8 @@
 import { useQueryClient } from '@tanstack/react-query';
-import { useCallback, useEffect, useReducer, useRef, useState } from 'react';
+import { useCallback, useEffect, useReducer, useState } from 'react';
 import { saveMember, type MemberRecord, type StoredMember } from '#shared/contracts/members.ts';
 import { ApiProblem, call } from '#src/lib/api/call.ts';
-import { dropDraft, keepDraft, keptDraft } from '../lib/draftStore.ts';
+import { canKeep, dropDraft, keepDraft, keptDraft } from '../lib/draftStore.ts';
 import { isChanged, openSheet, sheetAfter, type Sheet, type SheetEvent } from '../lib/sheet.ts';
 import { memberKey } from './useMember.ts';
 
@@ -35,10 +35,11 @@ export function useSheet(record: MemberRecord, person: string, readOnly: boolean
     readOnly ? openSheet(given.document, given.version) : opened(given, person),
   );
   const [saving, setSaving] = useState<SaveState>({ kind: 'idle' });
-  const [kept, setKept] = useState(true);
-  const restored = useRef(sheet.document !== record.document);
+  const [restored] = useState(() => sheet.document !== record.document);
   const changed = isChanged(sheet);
 
+  // Whether the browser's storage takes anything is found out once, before anything is typed.
+  const [kept] = useState(() => readOnly || canKeep(localStorage));
   useEffect(() => {
     if (readOnly) return;
     if (!changed) {
@@ -46,8 +47,12 @@ export function useSheet(record: MemberRecord, person: string, readOnly: boolean
       return;
     }
     const { document, unread, saved } = sheet;
-    const draft = { document, unread, version: saved.version, at: new Date().toISOString() };
-    setKept(keepDraft(localStorage, person, record.id, draft));
+    keepDraft(localStorage, person, record.id, {
+      document,
+      unread,
+      version: saved.version,
+      at: new Date().toISOString(),
+    });
   }, [changed, person, readOnly, record.id, sheet]);
 
   const save = useCallback(async (): Promise<void> => {
@@ -85,6 +90,6 @@ export function useSheet(record: MemberRecord, person: string, readOnly: boolean
     dismiss: () => setSaving({ kind: 'idle' }),
     /** Whether the browser keeps what is typed; false where its storage is full or forbidden. */
     kept,
-    restored: restored.current,
+    restored,
   };
 }

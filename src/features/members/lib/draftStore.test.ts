@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { Member } from '#shared/basis/schema/index.ts';
-import { dropDraft, keepDraft, keptDraft, type Store } from './draftStore.ts';
+import { canKeep, dropDraft, keepDraft, keptDraft, type Store } from './draftStore.ts';
 
 function memory(): Store {
   const values = new Map<string, string>();
@@ -32,6 +32,8 @@ describe('unsaved members kept on this machine', () => {
       },
     };
     expect(keepDraft(full, 'p', 'm', draft)).toBe(false);
+    expect(canKeep(full)).toBe(false);
+    expect(canKeep(store)).toBe(true);
     store.setItem('ledgerbeam.member.p.m', '{broken');
     expect(keptDraft(store, 'p', 'm')).toBeNull();
   });

@@ -45,3 +45,14 @@ export function dropDraft(store: Store, person: string, member: string): void {
     // Nothing was kept where storage is forbidden.
   }
 }
+
+/** Whether this browser keeps anything at all. */
+export function canKeep(store: Store): boolean {
+  try {
+    store.setItem('ledgerbeam.try', '1');
+    store.removeItem('ledgerbeam.try');
+    return true;
+  } catch {
+    return false;
+  }
+}
