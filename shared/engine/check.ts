@@ -13,7 +13,7 @@ import type { Member, Plan, Result } from './types.ts';
 export function check(plan: Plan, member: Member): Result {
   const { runtime, stationery } = preparedOf(plan);
   const memberHash = hashOfMember(member);
-  const outcome = stand(runtime, member, null, null, true);
+  const outcome = stand(runtime, member, null, null, 'places');
   return outcome.ok
     ? resultOf(outcome.standing, plan.hash, memberHash, stationery)
     : withoutVerdict(plan.edition, plan.hash, member, memberHash, outcome.findings);

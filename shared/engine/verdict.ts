@@ -17,15 +17,18 @@ export interface QuickVerdict extends Judgement {
  *
  * @param memo Handed from member to member where only the section or grade changes.
  * @param trial Values that stand in for clauses, by clause id, in the edition's units.
+ * @param extent `until-failing` stops at the first check that fails: the word is right, the numbers only
+ *   where it passes.
  */
 export function verdict(
   plan: Plan,
   member: Member,
   memo: ModelMemo | null = null,
   trial: ReadonlyMap<string, number> | null = null,
+  extent: 'numbers' | 'until-failing' = 'numbers',
 ): QuickVerdict {
   const { runtime } = preparedOf(plan);
-  const outcome = stand(runtime, member, memo, trial);
+  const outcome = stand(runtime, member, memo, trial, extent);
   if (!outcome.ok) {
     const because = outcome.findings.find(({ severity }) => severity === 'error')?.message;
     return {

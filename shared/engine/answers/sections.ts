@@ -17,6 +17,9 @@ export function withSection(member: Member, { actual, nominal, id }: StockSectio
   return { ...member, grade, section: { b: actual.b, h: actual.h, pieces, nominal, stock: id } };
 }
 
+const tried = (plan: Plan, member: Member, memo: ModelMemo) =>
+  verdict(plan, member, memo, null, 'until-failing');
+
 const soldIn = ({ grades }: StockSection, grade: string) => grades?.includes(grade) ?? true;
 
 /** Sizes this close are the same breadth. */
@@ -36,8 +39,7 @@ export function nextInStock(plan: Plan, member: Member, stock: readonly StockSec
     )
     .sort((a, b) => a.actual.h - b.actual.h);
   return (
-    fitting.find((section) => passing(verdict(plan, withSection(member, section, member.grade), memo))) ??
-    null
+    fitting.find((section) => passing(tried(plan, withSection(member, section, member.grade), memo))) ?? null
   );
 }
 
@@ -58,16 +60,16 @@ export function* sectionSearch(
   member: Member,
   { stock, grades, rank }: FindOptions,
 ): Generator<number, FoundSection[]> {
-  const tried = grades ?? plan.edition.grades.rows.map(({ id }) => id);
+  const wanted = grades ?? plan.edition.grades.rows.map(({ id }) => id);
   const memo = new ModelMemo();
   const found: FoundSection[] = [];
-  const total = stock.length * tried.length;
+  const total = stock.length * wanted.length;
   let done = 0;
   for (const section of stock) {
-    for (const grade of tried) {
+    for (const grade of wanted) {
       done += 1;
       if (soldIn(section, grade)) {
-        const result = verdict(plan, withSection(member, section, grade), memo);
+        const result = tried(plan, withSection(member, section, grade), memo);
         if (passing(result)) found.push(foundSection(section, grade, member.section.pieces, result));
       }
       yield done / total;

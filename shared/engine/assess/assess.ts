@@ -36,48 +36,65 @@ export const ROUNDING = 1e-12;
 const kinds: readonly PlaceKind[] = ['moment', 'shear', 'support', 'deflection'];
 
 /**
- * Evaluates every check of the edition under every combination at every place where it applies.
- *
- * @param keep Whether to keep the places, for a result with its ledger.
+ * How much of an assessment is wanted: the numbers; the numbers and the places, for a result with its
+ * ledger; or the numbers until the first check that fails, for a search.
  */
+export type Extent = 'numbers' | 'places' | 'until-failing';
+
+/** Evaluates every check of the edition under every combination at every place where it applies. */
 export function assess(
   runtime: Runtime,
   env: Env,
   context: Context,
   combinations: readonly ExpandedCombination[],
-  keep: boolean,
+  extent: Extent,
 ): Assessment[] {
   const assessments = runtime.checks.map((check) => newAssessment(check, combinations.length));
   const { situation } = context;
-  if (situation) {
-    const visitor = new PlaceVisitor(situation);
-    context.visitor = visitor;
-    for (let c = 0; c < combinations.length; c += 1) {
-      const combination = combinations[c] as ExpandedCombination;
-      atCombination(runtime, env, context, combination);
-      for (const kind of kinds) {
-        const indices = runtime.checksAt.get(`${combination.state}@${kind}`);
-        if (!indices) continue;
-        const here = indices.map((index) => assessments[index] as Assessment);
-        if (combination.problem) {
-          for (const assessment of here) note(assessment, combination.problem, c, null);
-          continue;
-        }
-        visitor.visit(kind, combination, (place) => {
-          atPlace(runtime, env, context, place);
-          for (let i = 0; i < here.length; i += 1) {
-            assessAt(here[i] as Assessment, env, c, place, keep);
-          }
-        });
-      }
-    }
-  }
+  const keep = extent === 'places';
+  const stop = extent === 'until-failing';
   atMember(runtime, env, context);
   for (const assessment of assessments) {
-    if (assessment.check.kind === 'member') assessAt(assessment, env, -1, null, keep);
+    if (assessment.check.kind !== 'member') continue;
+    assessAt(assessment, env, -1, null, keep);
+    if (stop && fails(assessment)) return assessments;
+  }
+  if (!situation) return assessments;
+  const visitor = new PlaceVisitor(situation);
+  context.visitor = visitor;
+  for (let c = 0; c < combinations.length; c += 1) {
+    const combination = combinations[c] as ExpandedCombination;
+    atCombination(runtime, env, context, combination);
+    for (const kind of kinds) {
+      const here = checksAt(runtime, assessments, combination.state, kind);
+      if (here.length === 0) continue;
+      if (combination.problem) {
+        for (const assessment of here) note(assessment, combination.problem, c, null);
+        continue;
+      }
+      visitor.visit(kind, combination, (place) => {
+        atPlace(runtime, env, context, place);
+        for (let i = 0; i < here.length; i += 1) {
+          assessAt(here[i] as Assessment, env, c, place, keep);
+        }
+      });
+      if (stop && here.some(fails)) return assessments;
+    }
   }
   return assessments;
 }
+
+function checksAt(
+  { checksAt: byKey }: Runtime,
+  assessments: readonly Assessment[],
+  state: string,
+  kind: PlaceKind,
+): readonly Assessment[] {
+  const found = byKey.get(`${state}@${kind}`);
+  return found ? found.map((index) => assessments[index] as Assessment) : [];
+}
+
+const fails = ({ refused, utilisation }: Assessment) => refused !== null || utilisation > 1 + ROUNDING;
 
 /** Leaves combination and place, so that only what holds for the whole member can be read. */
 export function atMember(runtime: Runtime, env: Env, context: Context): void {

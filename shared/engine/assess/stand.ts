@@ -12,7 +12,7 @@ import { evaluate, whyNot } from '../run/formula.ts';
 import type { Runtime } from '../run/runtime.ts';
 import { atTerm, leaveTerm } from '../run/terms.ts';
 import type { Finding } from '../types.ts';
-import { assess, type Assessment, atMember } from './assess.ts';
+import { assess, type Assessment, atMember, type Extent } from './assess.ts';
 import type { ModelMemo } from './modelMemo.ts';
 import { type ShearRule, situate } from './situation.ts';
 
@@ -38,7 +38,7 @@ export function stand(
   member: Member,
   memo: ModelMemo | null = null,
   trial: ReadonlyMap<string, number> | null = null,
-  keep = false,
+  extent: Extent = 'numbers',
 ): StandOutcome {
   const { edition, env } = runtime;
   const reading = readMember(edition, member);
@@ -84,7 +84,7 @@ export function stand(
   if (!expansion.ok) {
     return { ok: false, findings: [finding('too-many-combinations', '/loads', expansion.message)] };
   }
-  const assessments = assess(runtime, env, context, expansion.combinations, keep);
+  const assessments = assess(runtime, env, context, expansion.combinations, extent);
   return {
     ok: true,
     standing: {

@@ -53,11 +53,13 @@ function instanceOf(
   combination: ExpandedCombination | undefined,
   utilisation: number | null,
 ): Instance {
-  return {
-    ...(combination ? { combination: combination.id } : {}),
-    ...(place ? { place: placeName(place, context.geometry?.nodes.length ?? 0), x: place.x } : {}),
-    utilisation,
-  };
+  const instance: Instance = { utilisation };
+  if (combination) instance.combination = combination.id;
+  if (place) {
+    instance.place = placeName(place, context.geometry?.nodes.length ?? 0);
+    instance.x = place.x;
+  }
+  return instance;
 }
 
 /** The worst place under each combination. */
