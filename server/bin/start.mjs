@@ -22,6 +22,7 @@ async function start() {
     database = await cluster('app');
     env.DATABASE_OWNER_URL = `${database.ownerUrl}ledgerbeam`;
     env.DATABASE_URL = `${database.appUrl}ledgerbeam`;
+    env.SESSION_SECRET ??= database.sessionSecret;
   }
   ensureBuilt();
   const server = spawn(process.execPath, ['--import', 'tsx', join(root, 'server', 'bin', 'serve.ts')], {
