@@ -1,19 +1,11 @@
 import type { ValidateFunction } from 'ajv';
-import { Ajv2020 } from 'ajv/dist/2020.js';
-import formats from 'ajv-formats';
 import type { Contract, InputProblem } from '#shared/contracts/index.ts';
-import { narrowAlternatives } from './alternatives.ts';
-import { plainJsonProblems } from './plainJson.ts';
+import { plainJsonProblems } from '#shared/validation/plainJson.ts';
+import { problemsOf, validator } from '#shared/validation/validator.ts';
 import { invalid, notFound } from './problem.ts';
-import { sentenceOf } from './sentences.ts';
 
 /** Most problems told at once. */
 const MOST = 100;
-
-function validator(coerceTypes: boolean): Ajv2020 {
-  const ajv = new Ajv2020({ allErrors: true, useDefaults: true, coerceTypes, strict: true, verbose: true });
-  return formats.default(ajv, ['uuid', 'date-time', 'uri-reference']);
-}
 
 /** Bodies and answers are taken as they are; only the query, which is text, is turned into numbers. */
 const exact = validator(false);
@@ -62,14 +54,4 @@ function bodyProblems(validate: ValidateFunction, body: unknown): InputProblem[]
   if (body === undefined) return [{ pointer: '', message: 'A JSON body is needed here.' }];
   const unstorable = plainJsonProblems(body);
   return unstorable.length > 0 ? unstorable : problemsOf(validate, body);
-}
-
-function problemsOf(validate: ValidateFunction, value: unknown): InputProblem[] {
-  if (validate(value)) return [];
-  const problems = narrowAlternatives(validate.errors ?? []).map(sentenceOf);
-  const seen = new Set<string>();
-  return problems.filter(({ pointer, message }) => {
-    const key = `${pointer} ${message}`;
-    return seen.has(key) ? false : seen.add(key);
-  });
 }

@@ -1,4 +1,4 @@
-import type { InputProblem } from '#shared/contracts/index.ts';
+import type { InputProblem } from '#shared/contracts/problem.ts';
 
 const DEEPEST = 60;
 const reserved = new Set(['__proto__', 'constructor', 'prototype']);

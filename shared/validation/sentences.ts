@@ -1,5 +1,5 @@
 import type { ErrorObject } from 'ajv';
-import type { InputProblem } from '#shared/contracts/index.ts';
+import type { InputProblem } from '#shared/contracts/problem.ts';
 
 const kinds: Readonly<Record<string, string>> = {
   string: 'a text',
