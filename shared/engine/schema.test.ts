@@ -5,10 +5,10 @@ import { testMember } from '#tests/factories/edition.ts';
 import { members } from '#tests/factories/members.ts';
 import { testPlan } from '#tests/factories/plan.ts';
 import { check } from './index.ts';
-import { ResultDocument } from './schema.ts';
+import { ResultSchema } from './schema.ts';
 
 const plan = testPlan();
-const validate = new Ajv2020({ strict: false }).compile(ResultDocument);
+const validate = new Ajv2020({ strict: false }).compile(ResultSchema);
 
 describe('the result schema', () => {
   it('holds for every result, with nothing in it that it does not know', () => {

@@ -136,7 +136,7 @@ const SupportReaction = closed({
 });
 
 /** JSON Schema of the result document. */
-export const ResultDocument = Type.Object(
+export const ResultSchema = Type.Object(
   {
     schema: Type.Literal('result/1'),
     engine: Text,
@@ -161,4 +161,4 @@ export const ResultDocument = Type.Object(
 );
 
 /** A document of the schema is a result: what is read from storage can be used as one. */
-export const asResult = (document: Static<typeof ResultDocument>): Result => document;
+export const asResult = (document: Static<typeof ResultSchema>): Result => document;
