@@ -1,50 +1,13 @@
 import fc from 'fast-check';
-import { evaluate } from 'mathjs';
 import { describe, expect, it } from 'vitest';
 import { attest } from '#shared/engine/attest.ts';
-import { check, type LedgerEntry, type Result, verdict } from '#shared/engine/index.ts';
+import { check, verdict } from '#shared/engine/index.ts';
 import { testEdition, testMember } from '#tests/factories/edition.ts';
 import { members } from '#tests/factories/members.ts';
 import { testPlan } from '#tests/factories/plan.ts';
+import { expectReproducible } from '#tests/factories/reproduce.ts';
 
 const plan = testPlan();
-
-/** The value of an entry worked out by mathjs from the entries it uses, by nothing else. */
-function reproduced(ledger: readonly LedgerEntry[], { formula, uses }: LedgerEntry): unknown {
-  const scope = Object.fromEntries(
-    Object.entries(uses).flatMap(([symbol, n]) => {
-      const value = ledger[n]?.value;
-      return typeof value === 'number' ? [[symbol, value] as const] : [];
-    }),
-  );
-  return evaluate(formula ?? '', scope) as unknown;
-}
-
-function expectReproducible({ ledger, checks }: Result): void {
-  ledger.forEach((entry, i) => {
-    expect(entry.n).toBe(i);
-    for (const used of Object.values(entry.uses)) expect(used).toBeLessThan(entry.n);
-    if (entry.formula === undefined || entry.value === null) return;
-    const again = reproduced(ledger, entry);
-    expectClose(again, entry.value, entry);
-    expectClose(evaluate(entry.substituted ?? ''), entry.value, entry);
-  });
-  for (const { entry, utilisation, demand, limit } of checks) {
-    const own = ledger[entry];
-    expect(own?.value).toBe(utilisation);
-    if (demand && limit && utilisation !== null) {
-      expectClose(demand.value / limit.value, utilisation, own);
-    }
-  }
-}
-
-function expectClose(again: unknown, value: unknown, entry: unknown): void {
-  if (typeof again !== 'number' || typeof value !== 'number') throw new Error(JSON.stringify(entry));
-  const difference = Math.abs(again - value);
-  if (!(difference <= 1e-12 * Math.max(1e-9, Math.abs(value)))) {
-    throw new Error(`${String(again)} is not ${String(value)}: ${JSON.stringify(entry)}`);
-  }
-}
 
 describe('the ledger', () => {
   it('alone reproduces every entry and every utilisation', () => {
