@@ -72,9 +72,8 @@ describe('the engine', () => {
   it('never finds a deeper section less stiff', () => {
     fc.assert(
       fc.property(members(plan.edition), fc.integer({ min: 1, max: 100 }), (member, deeper) => {
-        const noWeight = planWithoutWeight;
         const sag = (m: Member) =>
-          verdict(noWeight, m).checks.find(({ id }) => id === 'live-sag')?.utilisation ?? 0;
+          verdict(bendingOnly, m).checks.find(({ id }) => id === 'live-sag')?.utilisation ?? 0;
         expect(sag(withDepth(member, member.section.h + deeper))).toBeLessThanOrEqual(
           sag(member) * (1 + 1e-9),
         );
@@ -153,11 +152,16 @@ describe('the engine', () => {
   });
 });
 
-const planWithoutWeight = planOf(withoutWeight(testEdition()));
+const bendingOnly = planOf(withBendingOnly(testEdition()));
 
-function withoutWeight(edition: Edition): Edition {
+/**
+ * Without self-weight, which grows with depth, and without shear deformation: under a couple near a support
+ * that acts against the bending, and a deeper member can then sag more.
+ */
+function withBendingOnly(edition: Edition): Edition {
   const analysis = { ...edition.analysis };
   delete analysis.selfWeight;
+  delete analysis.shearStiffness;
   return { ...edition, analysis };
 }
 

@@ -92,29 +92,30 @@ export class PlaceVisitor {
   private moments(combination: ExpandedCombination, to: (place: Place) => void): void {
     const { situation, place, most, least } = this;
     const count = this.superposeAll(combination, 'moment');
-    for (let span = 0; span < situation.model.beam.spans.length; span += 1) {
-      let sagging = -Infinity;
-      let hogging = Infinity;
+    const spans = situation.model.beam.spans.length;
+    const sagging = new Float64Array(spans).fill(-Infinity);
+    const hogging = new Float64Array(spans).fill(Infinity);
+    let largest = 0;
+    for (let span = 0; span < spans; span += 1) {
       for (let a = 0; a < count; a += 1) {
         momentPeaks(situation.grid, this.sums[a] as Float64Array, span, most, least);
-        sagging = Math.max(sagging, most.value);
-        hogging = Math.min(hogging, least.value);
+        sagging[span] = Math.max(sagging[span] as number, most.value);
+        hogging[span] = Math.min(hogging[span] as number, least.value);
       }
-      // What rounding leaves of a zero moment is no place of its own.
-      const trace = Math.max(sagging, -hogging) * SAME;
-      const sags = sagging > trace || sagging >= -hogging;
-      const hogs = -hogging > trace;
+      largest = Math.max(largest, sagging[span] as number, -(hogging[span] as number));
+    }
+    // Where there is no moment, or only what rounding leaves of none, there is nothing to check.
+    const trace = largest * SAME;
+    for (let span = 0; span < spans; span += 1) {
+      const sag = sagging[span] as number;
+      const hog = hogging[span] as number;
       place.span = span;
       place.node = -1;
       for (let a = 0; a < count; a += 1) {
         // Arrangements with the same moment can differ in what else counts, such as where it is zero.
-        if (count > 1) momentPeaks(situation.grid, this.sums[a] as Float64Array, span, most, least);
-        if (sags && most.value >= sagging - Math.abs(sagging) * SAME) {
-          this.putMoment(combination, a, most, to);
-        }
-        if (hogs && least.value <= hogging + Math.abs(hogging) * SAME) {
-          this.putMoment(combination, a, least, to);
-        }
+        momentPeaks(situation.grid, this.sums[a] as Float64Array, span, most, least);
+        if (sag > trace && most.value >= sag * (1 - SAME)) this.putMoment(combination, a, most, to);
+        if (-hog > trace && -least.value >= -hog * (1 - SAME)) this.putMoment(combination, a, least, to);
       }
     }
   }

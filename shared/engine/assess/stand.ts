@@ -75,6 +75,10 @@ export function stand(
     given.bearings,
   );
 
+  if (context.situation.actions.length === 0) {
+    const message = 'No load acts on this member. Enter at least one.';
+    return { ok: false, findings: [finding('no-load', '/loads', message)] };
+  }
   const expansion = runtime.expansions.expand(
     edition,
     context.situation.actions.map(({ action }) => action),
@@ -184,7 +188,7 @@ function stiffnessOf(
   runtime: Runtime,
   env: Env,
   given: Given,
-): { flexibility: number | null; ratio: number | null | 'needed' } {
+): { flexibility: number | null; ratio: number | null | Problem } {
   const { bendingStiffness, shearStiffness } = runtime.edition.analysis;
   const bending = memberValue(runtime, env, bendingStiffness);
   const EI = bending.ok && isStiffness(bending.value) ? bending.value : null;
@@ -192,7 +196,12 @@ function stiffnessOf(
   const shear = memberValue(runtime, env, shearStiffness);
   const GA = shear.ok && isStiffness(shear.value) ? shear.value : null;
   if (EI !== null && GA !== null) return { flexibility: 1 / EI, ratio: withoutTrace(GA / EI) };
-  return { flexibility: null, ratio: isDeterminate(given) ? null : 'needed' };
+  if (isDeterminate(given)) return { flexibility: null, ratio: null };
+  const cause = bending.ok ? (shear.ok ? null : shear.problem) : bending.problem;
+  return {
+    flexibility: null,
+    ratio: cause ?? { kind: 'failed', symbol: bendingStiffness, message: NO_SIZE },
+  };
 }
 
 /**
@@ -200,6 +209,8 @@ function stiffnessOf(
  * share of E have the same ratio, and so the same analysis.
  */
 const withoutTrace = (ratio: number) => Number(ratio.toPrecision(13));
+
+const NO_SIZE = 'The stiffness has no sensible size.';
 
 /** A stiffness that can be calculated with. */
 const isStiffness = (value: number) => value > 1 / LARGEST && value < LARGEST ** 2;
@@ -215,20 +226,12 @@ function analyse(
   geometry: Geometry,
   given: Given,
   actions: readonly ActionLoads[],
-  ratio: number | null | 'needed',
+  ratio: number | null | Problem,
   memo: ModelMemo | null,
 ): { ok: true; model: Model } | { ok: false; findings: readonly Finding[] } {
-  if (ratio === 'needed') {
-    return {
-      ok: false,
-      findings: [
-        finding(
-          'no-stiffness',
-          '/grade',
-          'The stiffness of this member can’t be worked out, and a continuous member needs it to share out its moments.',
-        ),
-      ],
-    };
+  if (typeof ratio === 'object' && ratio !== null) {
+    const message = `A continuous member shares out its moments by its stiffness, which can’t be worked out. ${ratio.message}`;
+    return { ok: false, findings: [finding('no-stiffness', '', message)] };
   }
   const known = memo?.recall(given.member, geometry, ratio);
   if (known) return { ok: true, model: known };
