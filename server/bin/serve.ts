@@ -2,6 +2,7 @@
 import { randomBytes } from 'node:crypto';
 import { join } from 'node:path';
 import { migrate } from '#server/db/migrate.ts';
+import { SetUpError } from '#server/db/prepare.ts';
 import { demoPassword, seed } from '#server/db/seed.ts';
 import { BadSetting, readEnv } from '#server/env.ts';
 import { PortProblem, serve } from '#server/index.ts';
@@ -38,7 +39,7 @@ async function main(): Promise<void> {
 }
 
 main().catch((error: unknown) => {
-  const plain = error instanceof BadSetting || error instanceof PortProblem;
+  const plain = error instanceof BadSetting || error instanceof PortProblem || error instanceof SetUpError;
   console.error(plain ? error.message : error);
   process.exit(1);
 });

@@ -1,14 +1,13 @@
 import pg from 'pg';
 import { Sequelize } from 'sequelize';
-import { defineModels, type Models } from '#server/models/define.ts';
 
 /**
  * The application's connections: one pool for the data, a small one for sessions and rate limits, whose
- * packages want node-postgres itself. Models are for the door only.
+ * packages want node-postgres itself. Without the door there is nothing of any firm behind them: row-level security
+ * shows no row to a connection that has not said for which firm it asks.
  */
 export interface Database {
   readonly sequelize: Sequelize;
-  readonly models: Models;
   readonly pool: pg.Pool;
   close(): Promise<void>;
 }
@@ -36,7 +35,6 @@ export function connect(url: string, { most = 10, onPoolError }: ConnectionOptio
   pool.on('error', (error) => onPoolError?.(error));
   return {
     sequelize,
-    models: defineModels(sequelize),
     pool,
     close: async () => {
       await Promise.all([sequelize.close(), pool.end()]);

@@ -1,5 +1,6 @@
-import { QueryTypes, type Model, type ModelStatic, type Transaction } from 'sequelize';
+import { QueryTypes, type Model, type ModelStatic, type Sequelize, type Transaction } from 'sequelize';
 import type { SubjectType, TrailEvent } from '#shared/trail/index.ts';
+import { defineModels, type Models } from '#server/models/define.ts';
 import type { FirmRow } from '#server/models/rows.ts';
 import type { Database } from './connection.ts';
 import { FirmTable } from './firmTable.ts';
@@ -35,10 +36,20 @@ export async function withFirm<T>(
   work: (door: Door) => Promise<T>,
   { readOnly = false }: Manner = {},
 ): Promise<T> {
-  return database.sequelize.transaction(async (transaction) => {
-    await bind(database, transaction, who.firmId, who.personId, readOnly);
-    return work(doorFor(database, transaction, who));
-  });
+  return database.sequelize.transaction(async (transaction) =>
+    work(await openDoor(database, transaction, who, { readOnly })),
+  );
+}
+
+/** The door within a transaction that is already there; only for setting up a firm. */
+export async function openDoor(
+  database: Database,
+  transaction: Transaction,
+  who: Who,
+  { readOnly = false }: Manner = {},
+): Promise<Door> {
+  await bind(database, transaction, who.firmId, who.personId, readOnly);
+  return doorFor(database, transaction, who);
 }
 
 /** Firms that a person belongs to, asked before any firm is known: the only query outside a firm. */
@@ -67,7 +78,17 @@ async function bind(
   );
 }
 
-function doorFor({ sequelize, models }: Database, transaction: Transaction, { firmId, personId }: Who) {
+/** Models of each connection. They stay in here: whoever wants rows has to come through the door. */
+const defined = new WeakMap<Sequelize, Models>();
+
+function modelsOf(sequelize: Sequelize): Models {
+  const known = defined.get(sequelize) ?? defineModels(sequelize);
+  defined.set(sequelize, known);
+  return known;
+}
+
+function doorFor({ sequelize }: Database, transaction: Transaction, { firmId, personId }: Who) {
+  const models = modelsOf(sequelize);
   const table = <M extends Model>(model: ModelStatic<M>) => new FirmTable(model, firmId, transaction);
   return {
     firmId,

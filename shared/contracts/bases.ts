@@ -108,7 +108,7 @@ export const createBasis = contract({
     purpose: Type.Optional(Type.String({ maxLength: 4000 })),
     starter: Type.String({ pattern: '^[a-z0-9][a-z0-9-]{0,63}$' }),
   }),
-  example: { title: 'House basis: floors', starter: 'permissible-stress' },
+  example: { title: 'House basis: roofs', starter: 'permissible-stress-softwood' },
   output: Basis,
   status: 201,
 });

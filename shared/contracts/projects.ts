@@ -101,7 +101,7 @@ export const createProject = contract({
     stockListId,
     choices: Type.Optional(Choices),
   }),
-  example: { title: 'Boathouse floor' },
+  example: { title: 'Signal cabin, upper floor' },
   output: Project,
   status: 201,
 });

@@ -15,6 +15,7 @@ const event = <K extends string, D extends Parameters<typeof closed>[0]>(kind: K
  */
 export const TrailEvent = Type.Union([
   event('firm.set-up', { name: text }),
+  event('person.roles-changed', { name: text, roles: Type.Array(text) }),
   event('session.opened', {}),
   event('session.closed', {}),
   event('project.opened', { title: text }),

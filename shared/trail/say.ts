@@ -7,6 +7,10 @@ export function say(event: TrailEvent): string {
   switch (event.kind) {
     case 'firm.set-up':
       return `set up the firm ${event.detail.name}`;
+    case 'person.roles-changed': {
+      const { name, roles } = event.detail;
+      return roles.length > 0 ? `gave ${name} the roles ${roles.join(', ')}` : `took ${name} out of the firm`;
+    }
     case 'session.opened':
       return 'signed in';
     case 'session.closed':

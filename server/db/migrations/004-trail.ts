@@ -5,7 +5,7 @@
  */
 export const name = '004-trail';
 
-const audited = ['firms', 'bases', 'editions', 'stock_lists', 'projects', 'members'];
+const audited = ['firms', 'memberships', 'bases', 'editions', 'stock_lists', 'projects', 'members'];
 
 export const up = `
 CREATE TABLE trail (

@@ -1,0 +1,214 @@
+import { roleTitles } from '#shared/access/index.ts';
+import { hashOf } from '#shared/basis/hash.ts';
+import type { Edition, Member } from '#shared/basis/schema/index.ts';
+import { starterNamed } from '#server/basis/starters.ts';
+import { unverifiedIn } from '#server/basis/unverified.ts';
+import { createPasswords, type Passwords } from '#server/http/passwords.ts';
+import { judgeAndKeep } from '#server/judge/keep.ts';
+import { Judge } from '#server/judge/judge.ts';
+import type { EditionRow } from '#server/models/rows.ts';
+import { connect, type Database } from './connection.ts';
+import { barn, barnMembers } from './demo/barn.ts';
+import { demoFirm, demoPassword, demoPeople } from './demo/firm.ts';
+import { houseEdition, houseFirst, houseNext } from './demo/houseEdition.ts';
+import { readingRoom, readingRoomMembers } from './demo/readingRoom.ts';
+import { demoStock } from './demo/stock.ts';
+import { withFirm, type Door } from './door.ts';
+import { setUpFirm } from './setUpFirm.ts';
+
+const STARTER = 'permissible-stress-softwood';
+
+export { demoPassword };
+
+/** A sign-in of the demo firm; all have the demo password. */
+export interface DemoSignIn {
+  role: string;
+  name: string;
+  email: string;
+}
+
+/**
+ * Sets up the demo firm once; the next time it is left as people made it. Takes the owner's address, gives
+ * the sign-ins.
+ */
+export async function seed(
+  ownerUrl: string,
+  passwords: Passwords = createPasswords(),
+): Promise<DemoSignIn[]> {
+  const owner = connect(ownerUrl, { most: 2 });
+  try {
+    const found = await owner.pool.query('SELECT 1 FROM people WHERE email = ANY($1) LIMIT 1', [
+      demoPeople.map(({ email }) => email),
+    ]);
+    if (found.rowCount === 0) await setUpDemo(owner, await passwords.hash(demoPassword));
+    return demoPeople.map(({ role, name, email }) => ({ role: roleTitles[role], name, email }));
+  } finally {
+    await owner.close();
+  }
+}
+
+async function setUpDemo(owner: Database, passwordHash: string): Promise<void> {
+  const starter = starterNamed(STARTER);
+  if (!starter) throw new Error(`The starter edition ${STARTER} is missing from rules/.`);
+  const people = demoPeople.map(({ role, name, email }) => ({ name, email, passwordHash, roles: [role] }));
+  const { firmId, people: ids } = await setUpFirm(owner, demoFirm, people);
+  const [principal = '', keeper = '', engineer = ''] = ids;
+  const judge = new Judge();
+
+  const { stockListId, ofStarter, ofHouse } = await withFirm(
+    owner,
+    { firmId, personId: keeper },
+    async (door) => {
+      const softwood = await setUpBasis(door, 'Permissible stress, softwood', starter, STARTER);
+      const house = await setUpBasis(
+        door,
+        'House basis: barns (invented)',
+        houseEdition(starter, houseFirst),
+        STARTER,
+      );
+      await submit(door, softwood);
+      await submit(door, house);
+      return { stockListId: await setUpStock(door), ofStarter: softwood.id, ofHouse: house.id };
+    },
+  );
+
+  // A second person releases what the keeper drafted.
+  const [pinStarter, pinHouse] = await withFirm(owner, { firmId, personId: principal }, async (door) => [
+    await release(door, ofStarter),
+    await release(door, ofHouse),
+  ]);
+  await withFirm(owner, { firmId, personId: keeper }, async (door) => {
+    const next = await addEdition(door, pinHouse.basisId, 2, houseEdition(starter, houseNext));
+    await submit(door, next);
+  });
+
+  await withFirm(owner, { firmId, personId: engineer }, async (door) => {
+    await setUpProject(door, judge, barn, stockListId, pinHouse, barnMembers);
+    await setUpProject(door, judge, readingRoom, stockListId, pinStarter, readingRoomMembers);
+  });
+}
+
+async function setUpBasis(
+  door: Door,
+  title: string,
+  document: Edition,
+  starter: string,
+): Promise<EditionRow> {
+  const basis = await door.bases.add({ title, purpose: document.purpose, createdBy: door.personId });
+  await door.record(
+    { kind: 'basis.set-up', v: 1, detail: { title, starter } },
+    { type: 'basis', id: basis.id, label: title },
+  );
+  return addEdition(door, basis.id, 1, document);
+}
+
+function addEdition(door: Door, basisId: string, number: number, document: Edition): Promise<EditionRow> {
+  return door.editions.add({
+    basisId,
+    number,
+    document,
+    hash: hashOf(document),
+    unverified: unverifiedIn(document),
+    draftedBy: door.personId,
+  });
+}
+
+async function submit(door: Door, edition: EditionRow): Promise<void> {
+  const reason =
+    edition.number === 1 ? 'First edition.' : 'Old timber and floors under stone, after the first jobs.';
+  await door.editions.change(edition, { state: 'in_check', submittedBy: door.personId, reason });
+  await door.record(
+    { kind: 'edition.submitted', v: 1, detail: { edition: labelOf(edition), reason } },
+    { type: 'edition', id: edition.id, label: labelOf(edition) },
+  );
+}
+
+async function release(door: Door, id: string): Promise<EditionRow> {
+  const edition = await door.editions.one({ id });
+  if (!edition) throw new Error('An edition of the demo is missing.');
+  await door.editions.change(edition, {
+    state: 'released',
+    releasedBy: door.personId,
+    releasedAt: new Date(),
+  });
+  await door.record(
+    { kind: 'edition.released', v: 1, detail: { edition: labelOf(edition), hash: edition.hash } },
+    { type: 'edition', id: edition.id, label: labelOf(edition) },
+  );
+  return edition;
+}
+
+const labelOf = ({ document, number }: EditionRow) => `${document.title}, edition ${number}`;
+
+async function setUpStock(door: Door): Promise<string> {
+  const { sections, ...list } = demoStock;
+  const { id } = await door.stockLists.add(list);
+  await door.sections.addMany(
+    sections.map(({ id: key, nominal, actual, lengths, grades, pricePerMetre }) => ({
+      stockListId: id,
+      key,
+      nominalB: nominal.b,
+      nominalH: nominal.h,
+      actualB: actual.b,
+      actualH: actual.h,
+      lengths,
+      grades,
+      pricePerMetre,
+    })),
+  );
+  await door.record(
+    { kind: 'stock.set-up', v: 1, detail: { title: list.title, sections: sections.length } },
+    { type: 'stock', id, label: list.title },
+  );
+  return id;
+}
+
+async function setUpProject(
+  door: Door,
+  judge: Judge,
+  given: { title: string; site: string; client: string; choices: Record<string, string> },
+  stockListId: string,
+  edition: EditionRow,
+  members: readonly Member[],
+): Promise<void> {
+  const project = await door.projects.add({
+    ...given,
+    stockListId,
+    editionId: edition.id,
+    createdBy: door.personId,
+  });
+  const subject = { type: 'project', id: project.id, label: project.title } as const;
+  await door.record({ kind: 'project.opened', v: 1, detail: { title: project.title } }, subject);
+  await door.record(
+    {
+      kind: 'project.edition-pinned',
+      v: 1,
+      detail: {
+        from: null,
+        to: edition.id,
+        edition: labelOf(edition),
+        reason: 'Agreed at the first meeting.',
+        rechecked: 0,
+      },
+    },
+    subject,
+  );
+  for (const document of members) {
+    const hash = hashOf(document);
+    const who = { savedBy: door.personId, savedAt: new Date() };
+    const member = await door.members.add({
+      projectId: project.id,
+      mark: document.mark,
+      document,
+      hash,
+      version: 1,
+      ...who,
+    });
+    await door.memberVersions.add({ memberId: member.id, version: 1, document, hash, ...who });
+    const verdict = await judgeAndKeep(door, judge, edition, project, member);
+    await door.record(
+      { kind: 'member.added', v: 1, detail: { mark: member.mark, project: project.id, verdict } },
+      { type: 'member', id: member.id, label: member.mark },
+    );
+  }
+}
