@@ -49,6 +49,7 @@ export class PlaceVisitor {
   private readonly sums: Float64Array[] = [];
   /** Not one of the sums, since it is asked for while they are being visited. */
   private aside: Float64Array | null = null;
+  private readonly peaks: { most: GridPeak; least: GridPeak }[] = [];
   private readonly most: GridPeak = { x: 0, piece: 0, value: 0 };
   private readonly least: GridPeak = { x: 0, piece: 0, value: 0 };
   private readonly situation: Situation;
@@ -81,6 +82,14 @@ export class PlaceVisitor {
     return buffer;
   }
 
+  /** Largest and smallest moment of a span in an arrangement, kept from the first pass to the second. */
+  private peaksAt(index: number): { most: GridPeak; least: GridPeak } {
+    return (this.peaks[index] ??= {
+      most: { x: 0, piece: 0, value: 0 },
+      least: { x: 0, piece: 0, value: 0 },
+    });
+  }
+
   /** Fills one buffer per arrangement; returns how many. */
   private superposeAll(combination: ExpandedCombination, key: 'moment' | 'deflection'): number {
     const count = arrangementCount(this.situation, combination);
@@ -90,7 +99,7 @@ export class PlaceVisitor {
   }
 
   private moments(combination: ExpandedCombination, to: (place: Place) => void): void {
-    const { situation, place, most, least } = this;
+    const { situation, place } = this;
     const count = this.superposeAll(combination, 'moment');
     const spans = situation.model.beam.spans.length;
     const sagging = new Float64Array(spans).fill(-Infinity);
@@ -98,6 +107,7 @@ export class PlaceVisitor {
     let largest = 0;
     for (let span = 0; span < spans; span += 1) {
       for (let a = 0; a < count; a += 1) {
+        const { most, least } = this.peaksAt(span * count + a);
         momentPeaks(situation.grid, this.sums[a] as Float64Array, span, most, least);
         sagging[span] = Math.max(sagging[span] as number, most.value);
         hogging[span] = Math.min(hogging[span] as number, least.value);
@@ -113,7 +123,7 @@ export class PlaceVisitor {
       place.node = -1;
       for (let a = 0; a < count; a += 1) {
         // Arrangements with the same moment can differ in what else counts, such as where it is zero.
-        momentPeaks(situation.grid, this.sums[a] as Float64Array, span, most, least);
+        const { most, least } = this.peaksAt(span * count + a);
         if (sag > trace && most.value >= sag * (1 - SAME)) this.putMoment(combination, a, most, to);
         if (-hog > trace && -least.value >= -hog * (1 - SAME)) this.putMoment(combination, a, least, to);
       }

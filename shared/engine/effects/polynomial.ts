@@ -47,6 +47,12 @@ export function rootsWithin(
   let top = terms - 1;
   while (top > 0 && (coefficients[at + top] as number) === 0) top -= 1;
   if (top === 0) return 0;
+  if (top === 1) {
+    const t = -(coefficients[at] as number) / (coefficients[at + 1] as number);
+    if (!(t > 0 && t < length)) return 0;
+    into[0] = t;
+    return 1;
+  }
   for (let i = 0; i <= top; i += 1) derivatives[i] = coefficients[at + i] as number;
   for (let order = 1; order < top; order += 1) {
     for (let i = 0; i <= top - order; i += 1) {

@@ -25,6 +25,8 @@ export class Recorder {
   readonly env: Env;
   readonly context: Context;
   readonly #known = new Map<string, number>();
+  /** Entries of what is the same all over the member, by slot. */
+  readonly #ofMember: number[] = [];
   readonly #templates: Map<string, Template>;
   /** Values of the entries as they stand inside formulas. */
   readonly #texts: string[] = [];
@@ -58,6 +60,9 @@ export class Recorder {
     const slot = this.runtime.slotOf.get(symbol);
     const known = slot === undefined ? undefined : this.runtime.symbols[slot];
     if (!known) throw new RangeError(`The edition has no symbol ${symbol}.`);
+    if (known.level === 'member' || known.level === 'edition') {
+      return (this.#ofMember[known.slot] ??= this.add(this.#write(known)));
+    }
     return this.once(`${symbol}${this.scopeOf(known)}`, () => this.#write(known));
   }
 
@@ -88,7 +93,6 @@ export class Recorder {
   /** What tells values of a symbol at different places apart. */
   scopeOf({ level, symbol, origin, index }: RunSymbol): string {
     const { combination, place, action, edition } = this.context;
-    if (level === 'edition' || level === 'member') return '';
     if (level === 'combination') return `@${combination?.id ?? ''}`;
     if (level === 'term') return `@${combination?.id ?? ''}@${action}`;
     if (origin === 'input') {
