@@ -11,10 +11,11 @@ interface DepthPanelProps {
   next: StockSection | null;
   readOnly: boolean;
   onTake: (section: StockSection) => void;
+  onFind: () => void;
 }
 
 /** The least depth by each check on its own, exact and rounded up, and the next section in stock. */
-export function DepthPanel({ depth, breadth, stock, next, readOnly, onTake }: DepthPanelProps) {
+export function DepthPanel({ depth, breadth, stock, next, readOnly, onTake, onFind }: DepthPanelProps) {
   const numbers = useNumbers();
   const unit = unitForReading(depth.unit);
   const inStock = (least: number | null) =>
@@ -32,12 +33,16 @@ export function DepthPanel({ depth, breadth, stock, next, readOnly, onTake }: De
       title="Required depth"
       note={`for a breadth of ${numbers.exact(breadth)} ${unit}, each check on its own`}
       actions={
-        next &&
-        !readOnly && (
-          <Button kind="quiet" onClick={() => onTake(next)}>
-            Take {numbers.exact(next.actual.b)} × {numbers.exact(next.actual.h)}
+        <>
+          <Button kind="quiet" onClick={onFind}>
+            Find a section
           </Button>
-        )
+          {next && !readOnly && (
+            <Button kind="quiet" onClick={() => onTake(next)}>
+              Take {numbers.exact(next.actual.b)} × {numbers.exact(next.actual.h)}
+            </Button>
+          )}
+        </>
       }
     >
       <div className="overflow-x-auto" tabIndex={0} role="group" aria-label="Required depth, table">

@@ -112,6 +112,7 @@ export function MemberSheet({
           record={record}
           editionReference={editionReference}
           edition={edition}
+          plan={plan}
           whole={whole}
           result={result}
           answers={answers}

@@ -2,7 +2,7 @@ import { useState } from 'react';
 import type { Edition, Member } from '#shared/basis/schema/index.ts';
 import type { EditionReference } from '#shared/contracts/common.ts';
 import type { MemberRecord } from '#shared/contracts/members.ts';
-import type { Result, StockSection } from '#shared/engine/types.ts';
+import type { Plan, Result, StockSection } from '#shared/engine/types.ts';
 import { unitForReading } from '#shared/units/format.ts';
 import { Notice } from '#src/components/Notice.tsx';
 import { Section } from '#src/components/Section.tsx';
@@ -13,6 +13,7 @@ import { useNumbers } from '#src/lib/format/locale.ts';
 import { checkOf, entriesOf, isMain } from '../lib/ledgerView.ts';
 import type { Answers } from '../lib/useVerdict.ts';
 import { DepthPanel } from './DepthPanel.tsx';
+import { FindSection } from './FindSection.tsx';
 import { EditionLine } from './EditionLine.tsx';
 import { HistoryPanel } from './HistoryPanel.tsx';
 import { LedgerTable } from './LedgerTable.tsx';
@@ -26,6 +27,7 @@ interface OutcomeProps {
   record: MemberRecord;
   editionReference: EditionReference;
   edition: Edition;
+  plan: Plan | null;
   whole: Member;
   result: Result | null;
   answers: Answers;
@@ -36,12 +38,13 @@ interface OutcomeProps {
 
 /** Verdict and evidence: from the word down to raw inputs, on one page. */
 export function Outcome(props: OutcomeProps) {
-  const { record, editionReference, edition, whole, result, answers, stock, unread, readOnly } = props;
-  const { send } = useTools();
+  const { record, editionReference, edition, plan, whole, result, answers, stock, unread, readOnly } = props;
+  const { member, send } = useTools();
   const numbers = useNumbers();
   const [chosen, setChosen] = useState<string | null>(null);
   const [entry, setEntry] = useState<number | null>(null);
   const [everything, setEverything] = useState(false);
+  const [finding, setFinding] = useState(false);
   const [holder, width] = useWidth<HTMLDivElement>(760);
   const check = result?.checks.find(({ id }) => id === chosen) ?? result?.checks[0];
   const cascade = result && check ? cascadeOf(result, check) : null;
@@ -87,6 +90,7 @@ export function Outcome(props: OutcomeProps) {
             stock={stock}
             next={answers.next}
             readOnly={readOnly}
+            onFind={() => setFinding(true)}
             onTake={({ actual, nominal, id }) =>
               send({
                 kind: 'set',
@@ -150,6 +154,21 @@ export function Outcome(props: OutcomeProps) {
         )}
         {result && result.reactions.length > 0 && <ReactionsTable result={result} edition={edition} />}
       </div>
+      {finding && plan && (
+        <FindSection
+          plan={plan}
+          edition={edition}
+          member={whole}
+          stock={stock}
+          readOnly={readOnly}
+          onClose={() => setFinding(false)}
+          onTake={({ actual, nominal, id }, grade) => {
+            const section = { ...actual, pieces: whole.section.pieces, nominal, stock: id };
+            send({ kind: 'replace', document: { ...member, grade, section } });
+            setFinding(false);
+          }}
+        />
+      )}
       <HistoryPanel
         member={record.id}
         hasResult={record.result !== null}
