@@ -41,7 +41,7 @@ export async function withFirm<T>(
   );
 }
 
-/** The door within a transaction that is already there; only for setting up a firm. */
+/** The door within a transaction that is already there; only for setting up firms. */
 export async function openDoor(
   database: Database,
   transaction: Transaction,

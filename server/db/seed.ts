@@ -1,3 +1,4 @@
+import type { Transaction } from 'sequelize';
 import { roleTitles } from '#shared/access/index.ts';
 import { hashOf } from '#shared/basis/hash.ts';
 import type { Edition, Member } from '#shared/basis/schema/index.ts';
@@ -13,7 +14,7 @@ import { demoFirm, demoPassword, demoPeople } from './demo/firm.ts';
 import { houseEdition, houseFirst, houseNext } from './demo/houseEdition.ts';
 import { readingRoom, readingRoomMembers } from './demo/readingRoom.ts';
 import { demoStock } from './demo/stock.ts';
-import { withFirm, type Door } from './door.ts';
+import { openDoor, type Door } from './door.ts';
 import { setUpFirm } from './setUpFirm.ts';
 
 const STARTER = 'permissible-stress-softwood';
@@ -40,52 +41,44 @@ export async function seed(
     const found = await owner.pool.query('SELECT 1 FROM people WHERE email = ANY($1) LIMIT 1', [
       demoPeople.map(({ email }) => email),
     ]);
-    if (found.rowCount === 0) await setUpDemo(owner, await passwords.hash(demoPassword));
+    if (found.rowCount === 0) {
+      const passwordHash = await passwords.hash(demoPassword);
+      await owner.sequelize.transaction((transaction) => setUpDemo(owner, transaction, passwordHash));
+    }
     return demoPeople.map(({ role, name, email }) => ({ role: roleTitles[role], name, email }));
   } finally {
     await owner.close();
   }
 }
 
-async function setUpDemo(owner: Database, passwordHash: string): Promise<void> {
+/** All of it or nothing: one transaction, through the door of whoever does each step. */
+async function setUpDemo(owner: Database, transaction: Transaction, passwordHash: string): Promise<void> {
   const starter = starterNamed(STARTER);
   if (!starter) throw new Error(`The starter edition ${STARTER} is missing from rules/.`);
   const people = demoPeople.map(({ role, name, email }) => ({ name, email, passwordHash, roles: [role] }));
-  const { firmId, people: ids } = await setUpFirm(owner, demoFirm, people);
-  const [principal = '', keeper = '', engineer = ''] = ids;
+  const { firmId, people: ids } = await setUpFirm(owner, transaction, demoFirm, people);
+  const [principalId = '', keeperId = '', engineerId = ''] = ids;
   const judge = new Judge();
 
-  const { stockListId, ofStarter, ofHouse } = await withFirm(
-    owner,
-    { firmId, personId: keeper },
-    async (door) => {
-      const softwood = await setUpBasis(door, 'Permissible stress, softwood', starter, STARTER);
-      const house = await setUpBasis(
-        door,
-        'House basis: barns (invented)',
-        houseEdition(starter, houseFirst),
-        STARTER,
-      );
-      await submit(door, softwood);
-      await submit(door, house);
-      return { stockListId: await setUpStock(door), ofStarter: softwood.id, ofHouse: house.id };
-    },
-  );
+  let door = await openDoor(owner, transaction, { firmId, personId: keeperId });
+  const softwood = await setUpBasis(door, 'Permissible stress, softwood', starter, STARTER);
+  const barns = houseEdition(starter, houseFirst);
+  const house = await setUpBasis(door, 'House basis: barns (invented)', barns, STARTER);
+  const stockListId = await setUpStock(door);
+  await submit(door, softwood);
+  await submit(door, house);
 
   // A second person releases what the keeper drafted.
-  const [pinStarter, pinHouse] = await withFirm(owner, { firmId, personId: principal }, async (door) => [
-    await release(door, ofStarter),
-    await release(door, ofHouse),
-  ]);
-  await withFirm(owner, { firmId, personId: keeper }, async (door) => {
-    const next = await addEdition(door, pinHouse.basisId, 2, houseEdition(starter, houseNext));
-    await submit(door, next);
-  });
+  door = await openDoor(owner, transaction, { firmId, personId: principalId });
+  await release(door, softwood);
+  await release(door, house);
 
-  await withFirm(owner, { firmId, personId: engineer }, async (door) => {
-    await setUpProject(door, judge, barn, stockListId, pinHouse, barnMembers);
-    await setUpProject(door, judge, readingRoom, stockListId, pinStarter, readingRoomMembers);
-  });
+  door = await openDoor(owner, transaction, { firmId, personId: keeperId });
+  await submit(door, await addEdition(door, house.basisId, 2, houseEdition(starter, houseNext)));
+
+  door = await openDoor(owner, transaction, { firmId, personId: engineerId });
+  await setUpProject(door, judge, barn, stockListId, house, barnMembers);
+  await setUpProject(door, judge, readingRoom, stockListId, softwood, readingRoomMembers);
 }
 
 async function setUpBasis(
@@ -123,9 +116,7 @@ async function submit(door: Door, edition: EditionRow): Promise<void> {
   );
 }
 
-async function release(door: Door, id: string): Promise<EditionRow> {
-  const edition = await door.editions.one({ id });
-  if (!edition) throw new Error('An edition of the demo is missing.');
+async function release(door: Door, edition: EditionRow): Promise<void> {
   await door.editions.change(edition, {
     state: 'released',
     releasedBy: door.personId,
@@ -135,7 +126,6 @@ async function release(door: Door, id: string): Promise<EditionRow> {
     { kind: 'edition.released', v: 1, detail: { edition: labelOf(edition), hash: edition.hash } },
     { type: 'edition', id: edition.id, label: labelOf(edition) },
   );
-  return edition;
 }
 
 const labelOf = ({ document, number }: EditionRow) => `${document.title}, edition ${number}`;

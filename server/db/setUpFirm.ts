@@ -1,5 +1,5 @@
 import { randomUUID } from 'node:crypto';
-import { QueryTypes } from 'sequelize';
+import { QueryTypes, type Transaction } from 'sequelize';
 import type { Role } from '#shared/access/index.ts';
 import type { Database } from './connection.ts';
 import { openDoor } from './door.ts';
@@ -30,6 +30,7 @@ export interface SetUpFirm {
  */
 export async function setUpFirm(
   owner: Database,
+  transaction: Transaction,
   { name, invented, solePractitioner = false }: NewFirm,
   people: readonly NewPerson[],
 ): Promise<SetUpFirm> {
@@ -37,29 +38,27 @@ export async function setUpFirm(
   const ids = people.map(() => randomUUID());
   const [personId] = ids;
   if (personId === undefined) throw new Error('A firm needs at least one person.');
-  await owner.sequelize.transaction(async (transaction) => {
-    const door = await openDoor(owner, transaction, { firmId, personId });
-    const write = (sql: string, bind: unknown[]) =>
-      owner.sequelize.query(sql, { bind, transaction, type: QueryTypes.RAW });
-    await write('INSERT INTO firms (id, name, invented, sole_practitioner) VALUES ($1, $2, $3, $4)', [
-      firmId,
-      name,
-      invented,
-      solePractitioner,
+  const door = await openDoor(owner, transaction, { firmId, personId });
+  const write = (sql: string, bind: unknown[]) =>
+    owner.sequelize.query(sql, { bind, transaction, type: QueryTypes.RAW });
+  await write('INSERT INTO firms (id, name, invented, sole_practitioner) VALUES ($1, $2, $3, $4)', [
+    firmId,
+    name,
+    invented,
+    solePractitioner,
+  ]);
+  for (const [i, person] of people.entries()) {
+    await write('INSERT INTO people (id, email, name, password_hash) VALUES ($1, $2, $3, $4)', [
+      ids[i],
+      person.email,
+      person.name,
+      person.passwordHash,
     ]);
-    for (const [i, person] of people.entries()) {
-      await write('INSERT INTO people (id, email, name, password_hash) VALUES ($1, $2, $3, $4)', [
-        ids[i],
-        person.email,
-        person.name,
-        person.passwordHash,
-      ]);
-      await door.memberships.add({ personId: ids[i] ?? '', roles: [...person.roles] });
-    }
-    await door.record(
-      { kind: 'firm.set-up', v: 1, detail: { name } },
-      { type: 'firm', id: firmId, label: name },
-    );
-  });
+    await door.memberships.add({ personId: ids[i] ?? '', roles: [...person.roles] });
+  }
+  await door.record(
+    { kind: 'firm.set-up', v: 1, detail: { name } },
+    { type: 'firm', id: firmId, label: name },
+  );
   return { firmId, people: ids };
 }

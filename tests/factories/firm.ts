@@ -45,10 +45,8 @@ export async function makeFirm(
     passwordHash,
     roles: [role],
   }));
-  const { firmId, people: ids } = await setUpFirm(
-    owner,
-    { name: `Test firm ${key}`, invented: true, ...given },
-    people,
+  const { firmId, people: ids } = await owner.sequelize.transaction((transaction) =>
+    setUpFirm(owner, transaction, { name: `Test firm ${key}`, invented: true, ...given }, people),
   );
   const byRole = Object.fromEntries(
     roles.map((role, i) => [role, { id: ids[i], email: people[i]?.email, name: people[i]?.name }]),
