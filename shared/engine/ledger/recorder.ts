@@ -2,12 +2,12 @@ import type { Context } from '../run/context.ts';
 import type { Env } from '../run/env.ts';
 import type { Runtime, RunSymbol } from '../run/runtime.ts';
 import type { LedgerEntry } from '../types.ts';
-import { recordBuiltIn } from './builtIns.ts';
-import { recordClause } from './clauses.ts';
 import type { Uses } from './entry.ts';
-import { recordActionValue, recordChoice, recordGradeValue, recordInput } from './stored.ts';
 import type { Standings } from './standing.ts';
 import { substitute, type Template, templateOf, written } from './substitute.ts';
+
+/** Makes the entry of a symbol's value where the evaluation stands, recording first what it rests on. */
+export type WriteSymbol = (recorder: Recorder, known: RunSymbol) => LedgerEntry;
 
 /** What ledgers of one plan have in common. */
 export interface Stationery {
@@ -32,7 +32,16 @@ export class Recorder {
   readonly #texts: string[] = [];
   readonly standings: Standings;
 
-  constructor(runtime: Runtime, env: Env, context: Context, { templates, standings }: Stationery) {
+  readonly #write: WriteSymbol;
+
+  constructor(
+    runtime: Runtime,
+    env: Env,
+    context: Context,
+    { templates, standings }: Stationery,
+    write: WriteSymbol,
+  ) {
+    this.#write = write;
     this.runtime = runtime;
     this.env = env;
     this.context = context;
@@ -61,9 +70,9 @@ export class Recorder {
     const known = slot === undefined ? undefined : this.runtime.symbols[slot];
     if (!known) throw new RangeError(`The edition has no symbol ${symbol}.`);
     if (known.level === 'member' || known.level === 'edition') {
-      return (this.#ofMember[known.slot] ??= this.add(this.#write(known)));
+      return (this.#ofMember[known.slot] ??= this.add(this.#write(this, known)));
     }
-    return this.once(`${symbol}${this.scopeOf(known)}`, () => this.#write(known));
+    return this.once(`${symbol}${this.scopeOf(known)}`, () => this.#write(this, known));
   }
 
   /** Entries of several symbols, by name. */
@@ -103,23 +112,6 @@ export class Recorder {
     if (origin === 'builtIn' && bySpan.has(symbol)) return `@span${place?.span ?? -1}`;
     if (origin === 'builtIn' && byNode.has(symbol)) return `@node${place?.node ?? -1}`;
     return `@${combination?.id ?? ''}@${place?.kind ?? ''}${place?.ordinal ?? -1}`;
-  }
-
-  #write(known: RunSymbol): LedgerEntry {
-    switch (known.origin) {
-      case 'builtIn':
-        return recordBuiltIn(this, known);
-      case 'choice':
-        return recordChoice(this, known);
-      case 'input':
-        return recordInput(this, known);
-      case 'gradeColumn':
-        return recordGradeValue(this, known);
-      case 'actionValue':
-        return recordActionValue(this, known);
-      default:
-        return recordClause(this, known);
-    }
   }
 }
 

@@ -1,7 +1,8 @@
 import type { Edition, Member } from '#shared/basis/schema/index.ts';
 import type { Standing } from '../assess/stand.ts';
 import { recordFactor } from '../ledger/effects.ts';
-import { Recorder, type Stationery } from '../ledger/recorder.ts';
+import { openLedger } from '../ledger/open.ts';
+import type { Recorder, Stationery } from '../ledger/recorder.ts';
 import type { Combination, Finding, Result } from '../types.ts';
 import { ENGINE_VERSION } from '../version.ts';
 import { checkResult } from './checks.ts';
@@ -55,7 +56,7 @@ export function resultOf(
 ): Result {
   const { context, runtime, env, given, assessments, findings } = standing;
   const { edition } = context;
-  const recorder = new Recorder(runtime, env, context, stationery);
+  const recorder = openLedger(runtime, env, context, stationery);
   const ordered = inOrder(assessments);
   const checks = ordered.map((assessment) => checkResult(standing, recorder, assessment));
   const combinations = combinationsOf(standing);
