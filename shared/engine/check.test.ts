@@ -115,6 +115,27 @@ describe('check', () => {
     expect(unsaid.verdict.because).toContain('Load sharing has not been chosen.');
   });
 
+  it('gives no deflection where the grade has no stiffness, and everything else', () => {
+    const edition = testEdition();
+    const [first, ...others] = edition.grades.rows;
+    if (!first) throw new Error('no grade');
+    const values = { ...first.values };
+    delete values['E_mean'];
+    const rows = [{ ...first, values }, ...others];
+    const result = check(planOf({ ...edition, grades: { ...edition.grades, rows } }), testMember());
+    expect(of(result, 'sag')).toMatchObject({ word: 'none', utilisation: null });
+    expect(result.verdict.because).toContain('Grade T16 has no mean modulus (E_mean)');
+    expect(of(result, 'bending').word).toBe('passes');
+  });
+
+  it('asks for a load', () => {
+    const edition = testEdition();
+    const analysis = { ...edition.analysis };
+    delete analysis.selfWeight;
+    const { findings } = check(planOf({ ...edition, analysis }), testMember({ loads: [] }));
+    expect(findings.map(({ code, pointer }) => [code, pointer])).toEqual([['no-load', '/loads']]);
+  });
+
   it('lets a departure stand in for a clause, with both values and the reason', () => {
     const departed = testMember({
       departures: [{ clause: 'depth', value: 1, reason: 'Tested in our shop.', approvedBy: 'A. Checker' }],

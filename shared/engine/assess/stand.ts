@@ -14,7 +14,9 @@ import { atTerm, leaveTerm } from '../run/terms.ts';
 import type { Finding } from '../types.ts';
 import { assess, type Assessment, atMember, type Extent } from './assess.ts';
 import type { ModelMemo } from './modelMemo.ts';
+import { memberValue } from './memberValue.ts';
 import { type ShearRule, situate } from './situation.ts';
+import { stiffnessOf } from './stiffness.ts';
 
 /** A member assessed: everything that results are drawn from. */
 export interface Standing {
@@ -59,6 +61,7 @@ export function stand(
   const placing = placeLoads(edition, given, geometry.geometry);
   if (!placing.ok) return placing;
   const stiffness = stiffnessOf(runtime, env, given);
+  context.noStiffness = stiffness.problem;
   const analysed = analyse(geometry.geometry, given, placing.actions, stiffness.ratio, memo);
   if (!analysed.ok) return analysed;
 
@@ -125,6 +128,7 @@ function newContext(runtime: Runtime, given: Given, trial: ReadonlyMap<string, n
     given,
     geometry: null,
     situation: null,
+    noStiffness: null,
     visitor: null,
     pattern: -1,
     combination: null,
@@ -132,27 +136,6 @@ function newContext(runtime: Runtime, given: Given, trial: ReadonlyMap<string, n
     place: null,
     overrides: overrides.size ? overrides : null,
   };
-}
-
-type NumberOutcome = { ok: true; value: number } | { ok: false; problem: Problem };
-
-/** Value of a clause that the analysis needs before there is any combination or place. */
-function memberValue(runtime: Runtime, env: Env, symbol: string): NumberOutcome {
-  const slot = runtime.slotOf.get(symbol);
-  if (slot === undefined) {
-    return {
-      ok: false,
-      problem: { kind: 'missing', symbol, message: `This edition has no clause ${symbol}.` },
-    };
-  }
-  const value = env.value(slot);
-  if (typeof value === 'number') return { ok: true, value };
-  const problem = env.problem(slot) ?? {
-    kind: 'failed',
-    symbol,
-    message: `${symbol} gives a word where the analysis needs a number.`,
-  };
-  return { ok: false, problem };
 }
 
 function geometryOf(
@@ -178,48 +161,6 @@ function geometryOf(
     },
     rule,
   );
-}
-
-/**
- * 1 / EI, and GA / EI where the edition counts shear deformation. Moments and reactions don't need them,
- * unless the member is continuous and shear counts; then they can't be worked out without.
- */
-function stiffnessOf(
-  runtime: Runtime,
-  env: Env,
-  given: Given,
-): { flexibility: number | null; ratio: number | null | Problem } {
-  const { bendingStiffness, shearStiffness } = runtime.edition.analysis;
-  const bending = memberValue(runtime, env, bendingStiffness);
-  const EI = bending.ok && isStiffness(bending.value) ? bending.value : null;
-  if (shearStiffness === undefined) return { flexibility: EI && 1 / EI, ratio: null };
-  const shear = memberValue(runtime, env, shearStiffness);
-  const GA = shear.ok && isStiffness(shear.value) ? shear.value : null;
-  if (EI !== null && GA !== null) return { flexibility: 1 / EI, ratio: withoutTrace(GA / EI) };
-  if (isDeterminate(given)) return { flexibility: null, ratio: null };
-  const cause = bending.ok ? (shear.ok ? null : shear.problem) : bending.problem;
-  return {
-    flexibility: null,
-    ratio: cause ?? { kind: 'failed', symbol: bendingStiffness, message: NO_SIZE },
-  };
-}
-
-/**
- * A ratio without the trace that rounding leaves in its last digits: grades whose shear modulus is the same
- * share of E have the same ratio, and so the same analysis.
- */
-const withoutTrace = (ratio: number) => Number(ratio.toPrecision(13));
-
-const NO_SIZE = 'The stiffness has no sensible size.';
-
-/** A stiffness that can be calculated with. */
-const isStiffness = (value: number) => value > 1 / LARGEST && value < LARGEST ** 2;
-
-/** Whether statics alone give the moments: as many held movements as there are equations. */
-function isDeterminate({ restraints }: Given): boolean {
-  let held = 0;
-  for (const restraint of restraints) held += restraint === 'fixed' ? 2 : restraint === 'pin' ? 1 : 0;
-  return held === 2;
 }
 
 function analyse(

@@ -108,6 +108,7 @@ export function fillBuiltIn(env: Env, slot: number, symbol: string, title: strin
   const value = builtIn ? builtIn.read(context) : null;
   if (typeof value === 'number') env.setNumber(slot, value);
   else if (typeof value === 'string') env.setWord(slot, value);
+  else if (symbol === 'w' && context.noStiffness) env.setProblem(slot, context.noStiffness);
   else {
     env.setProblem(slot, {
       kind: 'missing',

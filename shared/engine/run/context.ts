@@ -4,6 +4,7 @@ import type { Situation } from '../assess/situation.ts';
 import type { ExpandedCombination } from '../combine/expand.ts';
 import type { Geometry } from '../member/geometry.ts';
 import type { Given } from '../member/given.ts';
+import type { Problem } from './env.ts';
 
 /** Where an evaluation stands: the member, and the combination, action and place it is at. */
 export interface Context {
@@ -11,6 +12,8 @@ export interface Context {
   given: Given;
   geometry: Geometry | null;
   situation: Situation | null;
+  /** Why there are no deflections, where the edition gives the member no stiffness. */
+  noStiffness: Problem | null;
   visitor: PlaceVisitor | null;
   pattern: number;
   combination: ExpandedCombination | null;
