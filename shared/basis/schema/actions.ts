@@ -1,5 +1,5 @@
 import { Type, type Static } from '@sinclair/typebox';
-import { closed, Formula, Id, oneOf, Provenance, Symbol, Text, Title } from './common.ts';
+import { closed, Formula, Id, named, oneOf, Provenance, Symbol, Text, Title } from './common.ts';
 
 /** An option of duration. The list is ordered from the longest to the shortest. */
 export const Duration = closed({ id: Id, title: Title, note: Type.Optional(Text) });
@@ -16,7 +16,7 @@ export const Action = closed({
   title: Title,
   nature: oneOf('permanent', 'variable'),
   duration: Id,
-  values: Type.Record(Symbol, Type.Number()),
+  values: named(Symbol, Type.Number()),
   /** Placed span by span to its worst where there are several spans. */
   patterned: Type.Boolean(),
   /** Actions that are never taken together with this one. */

@@ -1,8 +1,12 @@
-import { Type, type Static, type TSchema } from '@sinclair/typebox';
+import { Type, type Static, type TSchema, type TString } from '@sinclair/typebox';
 
 /** Closed object: unknown keys are an error, never a warning. */
 export const closed = <T extends Record<string, TSchema>>(properties: T, description?: string) =>
   Type.Object(properties, { additionalProperties: false, ...(description ? { description } : {}) });
+
+/** Values by name; a name of another form is an error. */
+export const named = <K extends TString, T extends TSchema>(name: K, value: T) =>
+  Type.Record(name, value, { additionalProperties: false });
 
 /** One of a few words. */
 export const oneOf = <T extends string>(...words: readonly T[]) =>

@@ -1,5 +1,5 @@
 import { Type, type Static } from '@sinclair/typebox';
-import { closed, Id, oneOf, Provenance, Symbol, Text, Title, Unit } from './common.ts';
+import { closed, Id, named, oneOf, Provenance, Symbol, Text, Title, Unit } from './common.ts';
 
 /** A list a person picks from. `project` choices are inherited by members and can be overridden there. */
 export const Choice = closed({
@@ -53,11 +53,11 @@ export const Grade = closed({
   id: Id,
   title: Title,
   /** Options of the grade-scoped choices, such as the family of the material. */
-  choices: Type.Record(Symbol, Id),
-  values: Type.Record(Symbol, Type.Union([Type.Number(), SizeBands])),
+  choices: named(Symbol, Id),
+  values: named(Symbol, Type.Union([Type.Number(), SizeBands])),
   /** Provenance of the row; `cells` holds those that differ, by column symbol. */
   provenance: Provenance,
-  cells: Type.Optional(Type.Record(Symbol, Provenance)),
+  cells: Type.Optional(named(Symbol, Provenance)),
   note: Type.Optional(Text),
 });
 export type Grade = Static<typeof Grade>;

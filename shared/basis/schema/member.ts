@@ -1,5 +1,5 @@
 import { Type, type Static } from '@sinclair/typebox';
-import { closed, Id, oneOf, Symbol, Text, Title } from './common.ts';
+import { closed, Id, named, oneOf, Symbol, Text, Title } from './common.ts';
 
 /*
  * Units of a member document, by its `units`:
@@ -13,14 +13,14 @@ const positive = (description: string, maximum: number) =>
 
 export const SpanInput = closed({
   length: positive('Span length.', 100_000),
-  inputs: Type.Optional(Type.Record(Symbol, Type.Number())),
+  inputs: Type.Optional(named(Symbol, Type.Number())),
 });
 
 export const SupportInput = closed({
   restraint: oneOf('pin', 'fixed', 'free'),
   /** Length of bearing along the member. */
   bearing: Type.Optional(positive('Bearing length.', 5000)),
-  inputs: Type.Optional(Type.Record(Symbol, Type.Number())),
+  inputs: Type.Optional(named(Symbol, Type.Number())),
 });
 
 /** How a load on a sloping member is given: per length on plan, per length on the slope (both acting
@@ -82,7 +82,7 @@ export const Member = closed({
   title: Type.Optional(Title),
   units: oneOf('metric', 'inch-pound'),
   /** Options of the edition's project and member choices. */
-  choices: Type.Record(Symbol, Id),
+  choices: named(Symbol, Id),
   grade: Id,
   section: closed({
     /** Finished breadth of one piece, and depth. */
@@ -106,7 +106,7 @@ export const Member = closed({
   /** Width over which area loads reach the member: repeated members at a spacing, or one alone. */
   carries: Type.Optional(closed({ by: oneOf('spacing', 'tributary'), width: positive('Width.', 50_000) })),
   loads: Type.Array(LoadInput, { maxItems: 200 }),
-  inputs: Type.Record(Symbol, Type.Number()),
+  inputs: named(Symbol, Type.Number()),
   departures: Type.Array(Departure, { maxItems: 50 }),
   note: Type.Optional(Text),
 });

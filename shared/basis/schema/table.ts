@@ -1,5 +1,5 @@
 import { Type, type Static } from '@sinclair/typebox';
-import { closed, Id, oneOf, Provenance, Title, Unit } from './common.ts';
+import { closed, Id, named, oneOf, Provenance, Title, Unit } from './common.ts';
 
 /**
  * One key of a table and how it is matched.
@@ -35,6 +35,6 @@ export const Table = closed({
   values: Type.Array(Cell, { minItems: 1, maxItems: 5000 }),
   provenance: Provenance,
   /** Cells whose provenance differs, by their index in `values`. */
-  cells: Type.Optional(Type.Record(Type.String({ pattern: '^\\d{1,4}$' }), Provenance)),
+  cells: Type.Optional(named(Type.String({ pattern: '^\\d{1,4}$' }), Provenance)),
 });
 export type Table = Static<typeof Table>;
