@@ -27,7 +27,7 @@ describe('conditions in words', () => {
       ],
     });
     expect(words).toBe(
-      'depth h at most 72, and (use is floor joist, or not duration of the combination is one of long term)',
+      'depth h at most 72, and (use is floor joist, or (not duration of the combination is one of long term))',
     );
   });
 
