@@ -36,9 +36,12 @@ export async function withFirm<T>(
   work: (door: Door) => Promise<T>,
   { readOnly = false }: Manner = {},
 ): Promise<T> {
-  return database.sequelize.transaction(async (transaction) =>
-    work(await openDoor(database, transaction, who, { readOnly })),
-  );
+  return database.sequelize.transaction(async (transaction) => {
+    const done = await work(await openDoor(database, transaction, who, { readOnly }));
+    // Asks for the trail now, while the transaction can still be undone in the ordinary way.
+    if (!readOnly) await database.sequelize.query('SET CONSTRAINTS ALL IMMEDIATE', { transaction });
+    return done;
+  });
 }
 
 /** The door within a transaction that is already there; only for setting up firms. */

@@ -1,10 +1,10 @@
 import { randomUUID } from 'node:crypto';
-import { pino, type Logger } from 'pino';
+import { pino, type DestinationStream, type Logger, type LoggerOptions } from 'pino';
 import { pinoHttp } from 'pino-http';
 
 /** The server's log: JSON lines, without cookies, tokens, passwords or bodies. */
-export function createLog(level: string): Logger {
-  return pino({
+export function createLog(level: string, destination?: DestinationStream): Logger {
+  const options: LoggerOptions = {
     level,
     redact: {
       paths: [
@@ -13,13 +13,15 @@ export function createLog(level: string): Logger {
         'req.headers["x-csrf-token"]',
         'res.headers["set-cookie"]',
         '*.password',
-        '*.parameters',
+        'err.sql',
+        'err.parameters',
         'err.parent',
         'err.original',
       ],
       remove: true,
     },
-  });
+  };
+  return destination ? pino(options, destination) : pino(options);
 }
 
 /** One line for each request; the id is the reference that a person is given when something fails. */
