@@ -1,4 +1,4 @@
-import type { Transaction } from 'sequelize';
+import { QueryTypes, type Transaction } from 'sequelize';
 import { roleTitles } from '#shared/access/index.ts';
 import { hashOf } from '#shared/basis/hash.ts';
 import type { Edition, Member } from '#shared/basis/schema/index.ts';
@@ -18,6 +18,8 @@ import { openDoor, type Door } from './door.ts';
 import { setUpFirm } from './setUpFirm.ts';
 
 const STARTER = 'permissible-stress-softwood';
+/** Any number, the same in every process. */
+const LOCK = 7_246_020;
 
 export { demoPassword };
 
@@ -38,13 +40,17 @@ export async function seed(
 ): Promise<DemoSignIn[]> {
   const owner = connect(ownerUrl, { most: 2 });
   try {
-    const found = await owner.pool.query('SELECT 1 FROM people WHERE email = ANY($1) LIMIT 1', [
-      demoPeople.map(({ email }) => email),
-    ]);
-    if (found.rowCount === 0) {
-      const passwordHash = await passwords.hash(demoPassword);
-      await owner.sequelize.transaction((transaction) => setUpDemo(owner, transaction, passwordHash));
-    }
+    const passwordHash = await passwords.hash(demoPassword);
+    await owner.sequelize.transaction(async (transaction) => {
+      // Two starts at once: the second waits here, and then finds the firm.
+      await owner.sequelize.query(`SELECT pg_advisory_xact_lock(${LOCK})`, { transaction });
+      const found = await owner.sequelize.query('SELECT 1 FROM people WHERE email = $1', {
+        bind: [demoPeople[0]?.email],
+        transaction,
+        type: QueryTypes.SELECT,
+      });
+      if (found.length === 0) await setUpDemo(owner, transaction, passwordHash);
+    });
     return demoPeople.map(({ role, name, email }) => ({ role: roleTitles[role], name, email }));
   } finally {
     await owner.close();

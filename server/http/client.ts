@@ -1,5 +1,6 @@
 import { join } from 'node:path';
 import express, { Router } from 'express';
+import staticGzip from 'express-static-gzip';
 import { notFound } from './problem.ts';
 
 /** The built client: hashed files for good, the page itself asked for anew each time. */
@@ -7,7 +8,13 @@ export function serveClient(folder: string): Router {
   const router = Router();
   router.use(
     '/assets',
-    express.static(join(folder, 'assets'), { immutable: true, maxAge: '1y', index: false, redirect: false }),
+    // The build lays compressed copies beside the files.
+    staticGzip(join(folder, 'assets'), {
+      enableBrotli: true,
+      orderPreference: ['br', 'gz'],
+      index: false,
+      serveStatic: { immutable: true, maxAge: '1y', redirect: false },
+    }),
     () => {
       throw notFound();
     },

@@ -36,7 +36,6 @@ export function createLimits(database: Database, options: LimitOptions = {}): Li
       storeType: 'pool',
       tableName: 'rate_limits',
       tableCreated: true,
-      clearExpiredByTimeout: false,
       keyPrefix,
       points,
       duration: MINUTES_15,

@@ -212,6 +212,8 @@ describe('what never changes', () => {
         `hash = repeat('0', 64)`,
         'unverified = 0',
         'number = 9',
+        `reason = 'another'`,
+        `released_at = now()`,
         `drafted_by = '${firm.people.checker.id}'`,
       ];
       for (const change of changes) {

@@ -5,7 +5,18 @@
  */
 export const name = '004-trail';
 
-const audited = ['firms', 'memberships', 'bases', 'editions', 'stock_lists', 'projects', 'members'];
+const audited = [
+  'firms',
+  'memberships',
+  'bases',
+  'editions',
+  'stock_lists',
+  'sections',
+  'projects',
+  'members',
+  'member_versions',
+  'results',
+];
 
 export const up = `
 CREATE TABLE trail (

@@ -62,9 +62,11 @@ BEGIN
      IS DISTINCT FROM (OLD.id, OLD.firm_id, OLD.basis_id, OLD.number, OLD.drafted_by, OLD.drafted_at) THEN
     RAISE EXCEPTION 'The identity of an edition never changes' USING ERRCODE = 'LB003';
   END IF;
-  IF OLD.state <> 'draft'
-     AND (NEW.document, NEW.hash, NEW.unverified) IS DISTINCT FROM (OLD.document, OLD.hash, OLD.unverified) THEN
-    RAISE EXCEPTION 'An edition in state % never changes its document', OLD.state USING ERRCODE = 'LB003';
+  IF OLD.state <> 'draft' AND (
+    (NEW.document, NEW.hash, NEW.unverified) IS DISTINCT FROM (OLD.document, OLD.hash, OLD.unverified)
+    OR (NEW.state = OLD.state AND NEW IS DISTINCT FROM OLD)
+  ) THEN
+    RAISE EXCEPTION 'An edition in state % never changes but for its state', OLD.state USING ERRCODE = 'LB003';
   END IF;
   IF NEW.state <> OLD.state AND (OLD.state, NEW.state) NOT IN (
     ('draft', 'in_check'), ('in_check', 'draft'), ('in_check', 'released'),

@@ -162,7 +162,8 @@ function readChoices(
       );
     }
   }
-  for (const symbol of Object.keys(member.choices)) {
+  // In a fixed order: a document means the same however its names are ordered.
+  for (const symbol of Object.keys(member.choices).sort()) {
     const choice = edition.choices.find((each) => each.symbol === symbol && each.scope !== 'grade');
     if (!choice) find('unknown-choice', `/choices/${symbol}`, `This edition has no choice “${symbol}”.`);
   }
@@ -183,7 +184,7 @@ function readNumbers(edition: Edition, member: Member, units: UnitFactors, find:
     scope: 'member' | 'span' | 'support',
     pointer: string,
   ) => {
-    for (const [symbol, value] of Object.entries(values ?? {})) {
+    for (const [symbol, value] of Object.entries(values ?? {}).sort(([a], [b]) => (a < b ? -1 : 1))) {
       const input = edition.inputs.find((each) => each.symbol === symbol && each.scope === scope);
       if (!input) {
         find('unknown-input', `${pointer}/${symbol}`, `This edition has no input “${symbol}” here.`);
