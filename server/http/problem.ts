@@ -82,7 +82,7 @@ function refusalOfBody(error: unknown): Refusal | null {
   }
 }
 
-const awayCodes = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'ENOTFOUND', 'EPIPE', 'ENOENT']);
+const awayCodes = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'ENOTFOUND', 'EAI_AGAIN', 'EPIPE']);
 /** SQLSTATE: shut down, starting up, too many connections; class 08: connection. */
 const awayStates = /^(08...|57P0[123]|53300)$/;
 

@@ -60,6 +60,8 @@ export function createSessions({ pool }: Database, { secret, find }: SessionOpti
         name: COOKIE,
         secret,
         resave: false,
+        // The cookie is given anew with each answer, so that the 12 hours begin again.
+        rolling: true,
         saveUninitialized: false,
         cookie: { httpOnly: true, sameSite: 'lax', secure: 'auto', maxAge: HOURS_12 },
       }),

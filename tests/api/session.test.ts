@@ -73,6 +73,20 @@ describe('signing in', () => {
     expect((await planted.call(readDesk)).status).toBe(401);
   });
 
+  it('keeps the session of someone who goes on working', async () => {
+    const client = await signInAs(app, firm, 'checker');
+    const { pool } = app.services.database;
+    const sid = decodeURIComponent(client.cookie).match(/=s:([^.]+)/)?.[1];
+    await pool.query(`UPDATE sessions SET expire = now() + interval '1 minute' WHERE sid = $1`, [sid]);
+    const answer = await client.call(readDesk);
+    expect(answer.get('Set-Cookie')?.[0]?.split(';')[0]).toBe(client.cookie);
+    const { rows } = await pool.query(
+      `SELECT expire > now() + interval '11 hours' AS later FROM sessions WHERE sid = $1`,
+      [sid],
+    );
+    expect(rows).toEqual([{ later: true }]);
+  });
+
   it('marks the cookie for https where the request came over https', async () => {
     const behind = makeApp({ trustProxy: 'loopback' });
     const answer = await request(behind.express)

@@ -49,8 +49,7 @@ export async function changeProject(
   await refuseUnknownStock(door, given.stockListId);
   const values = Object.fromEntries(Object.entries(given).filter(([, value]) => value !== undefined));
   await door.projects.change(project, { ...values, version: version + 1, changedAt: new Date() });
-  const again = given.choices !== undefined && edition !== null && project.state === 'live';
-  const rechecked = again ? await judgeProject(door, judge, edition, project) : 0;
+  const rechecked = given.choices && edition ? await judgeProject(door, judge, edition, project) : 0;
   await door.record(
     { kind: 'project.changed', v: 1, detail: { fields: Object.keys(values), rechecked } },
     { type: 'project', id: project.id, label: project.title },

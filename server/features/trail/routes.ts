@@ -6,7 +6,7 @@ export const trailRoutes: readonly Route[] = [
   route(readTrail, async ({ door, query }) => {
     const limit = query.limit ?? 50;
     const rows = await door.select<TrailEntry>(
-      `SELECT t.id::int AS id, ${instant('t.at')} AS at, ${personJson('p')} AS person,
+      `SELECT t.id::float8 AS id, ${instant('t.at')} AS at, ${personJson('p')} AS person,
          jsonb_build_object('type', t.subject_type, 'id', t.subject_id, 'label', t.subject_label) AS subject,
          t.event
        FROM trail t JOIN people p ON p.id = t.person_id
