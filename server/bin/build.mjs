@@ -2,6 +2,7 @@ import { spawnSync } from 'node:child_process';
 import { createHash } from 'node:crypto';
 import { existsSync, readFileSync, readdirSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { brotliCompressSync, constants, gzipSync } from 'node:zlib';
 import { PlainError, root } from './cluster.mjs';
 
 /** Everything the client is built from. */
@@ -34,6 +35,17 @@ function digest() {
   return hash.digest('hex');
 }
 
+/** Lays a compressed copy beside each file that gains by it; they never change, so it is done once. */
+function compress(folder) {
+  for (const name of readdirSync(folder)) {
+    if (!/\.(js|css|svg)$/.test(name)) continue;
+    const content = readFileSync(join(folder, name));
+    const size = { [constants.BROTLI_PARAM_SIZE_HINT]: content.length };
+    writeFileSync(join(folder, `${name}.br`), brotliCompressSync(content, { params: size }));
+    writeFileSync(join(folder, `${name}.gz`), gzipSync(content, { level: 9 }));
+  }
+}
+
 /** Builds the client when what it is built from has changed since. */
 export function ensureBuilt() {
   const stamp = join(root, 'dist', '.built-from');
@@ -47,5 +59,6 @@ export function ensureBuilt() {
   );
   if (result.status !== 0)
     throw new PlainError(`The client could not be built:\n${result.stderr}${result.stdout}`);
+  compress(join(root, 'dist', 'assets'));
   writeFileSync(stamp, now);
 }

@@ -59,7 +59,7 @@ export function DataTable<T>({ label, columns, rows, rowKey, minWidth = '40rem' 
                     </span>
                   </button>
                 ) : (
-                  title
+                  <span className="inline-flex min-h-6 items-center">{title}</span>
                 )}
                 {unit && <span className="ml-1 font-mono">{unit}</span>}
               </th>

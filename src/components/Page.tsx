@@ -6,14 +6,16 @@ interface PageProps {
   lead?: ReactNode;
   actions?: ReactNode;
   children: ReactNode;
+  /** For pages whose table wants all the width there is. */
+  wide?: boolean;
 }
 
 /** A page with its title, what it is, and what can be done. */
-export function Page({ title, mark, lead, actions, children }: PageProps) {
+export function Page({ title, mark, lead, actions, children, wide = false }: PageProps) {
   return (
-    <div className="mx-auto max-w-6xl px-4 pt-6 md:px-8">
+    <div className={`mx-auto px-4 pt-6 md:px-8 ${wide ? 'max-w-[92rem]' : 'max-w-6xl'}`}>
       <header className="mb-6 flex flex-wrap items-start gap-x-6 gap-y-3">
-        <div className="min-w-0 flex-1">
+        <div className="min-w-0 flex-1 basis-full sm:basis-0">
           <h1 className="flex flex-wrap items-center gap-3 text-3xl">
             {title} {mark}
           </h1>

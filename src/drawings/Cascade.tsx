@@ -167,7 +167,7 @@ export function Cascade({ data, width, number, unit, utilisation, onOpen }: Casc
           strokeWidth={1.75}
         />
         <text
-          x={width - margin.right - x.bandwidth() - 14}
+          x={(x('limit') ?? width) - 8}
           y={y(data.demand.value) + (y(data.demand.value) > height / 2 ? -7 : 15)}
           textAnchor="end"
           className="fill-accent-ink stroke-paper font-mono text-xs"

@@ -15,6 +15,8 @@ interface LoadRowProps {
 }
 
 const arrowGap = 42;
+/** Height of one line load with its label; several stand on top of each other. */
+export const bandHeight = 34;
 
 /** Loads above the member: line loads stacked as bands of arrows, point loads and couples over them. */
 export function LoadRow({ loads, x, bottom, width }: LoadRowProps) {
@@ -27,11 +29,17 @@ export function LoadRow({ loads, x, bottom, width }: LoadRowProps) {
   return (
     <g>
       {lines.map((load, index) => (
-        <LineBand key={`line${index}`} load={load} x={x} bottom={bottom} largest={largest} />
+        <LineBand
+          key={`line${index}`}
+          load={load}
+          x={x}
+          bottom={bottom - index * bandHeight}
+          largest={largest}
+        />
       ))}
       {others.map((load, index) => {
         const px = x(load.x);
-        const top = bottom - 62;
+        const top = bottom - Math.max(62, lines.length * bandHeight + 12);
         const end = px > width * 0.75;
         const up = load.kind === 'point' && load.force < 0;
         return (
@@ -85,7 +93,7 @@ function LineBand({
   bottom: number;
   largest: number;
 }) {
-  const height = (intensity: number) => 8 + (22 * Math.abs(intensity)) / largest;
+  const height = (intensity: number) => 6 + (13 * Math.abs(intensity)) / largest;
   const x0 = x(load.from);
   const x1 = x(load.to);
   const count = Math.max(2, Math.round((x1 - x0) / arrowGap) + 1);

@@ -4,7 +4,7 @@ import { useMemo, useState, type KeyboardEvent, type PointerEvent } from 'react'
 import type { Restraint } from '#shared/analysis/types.ts';
 import type { Curves } from '#shared/engine/types.ts';
 import { shown, type Display } from './display.ts';
-import { LoadRow, type StripLoad } from './LoadRow.tsx';
+import { bandHeight, LoadRow, type StripLoad } from './LoadRow.tsx';
 import { bandOf, extentOf, nearestSample, readAt, type Diagram } from './stripGeometry.ts';
 import { SupportMark } from './SupportMark.tsx';
 
@@ -29,7 +29,7 @@ interface MemberStripProps {
 }
 
 const margin = { left: 44, right: 44 };
-const rows = { load: 92, beam: 14, supports: 44, diagram: 74, gap: 20, readout: 26 };
+const rows = { beam: 14, supports: 44, diagram: 74, gap: 20, readout: 26 };
 
 const diagrams: readonly {
   of: Diagram;
@@ -52,7 +52,9 @@ export function MemberStrip(props: MemberStripProps) {
   const x = scaleLinear()
     .domain([0, length])
     .range([margin.left, width - margin.right]);
-  const beamTop = rows.load;
+  const lines = loads.filter(({ kind }) => kind === 'line').length;
+  const others = loads.length > lines ? 30 : 0;
+  const beamTop = Math.max(70, lines * bandHeight + others + 24);
   const firstDiagram = beamTop + rows.beam + rows.supports;
   const height = firstDiagram + diagrams.length * (rows.diagram + rows.gap) + rows.readout;
   const bands = useMemo(

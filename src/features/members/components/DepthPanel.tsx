@@ -18,6 +18,8 @@ interface DepthPanelProps {
 export function DepthPanel({ depth, breadth, stock, next, readOnly, onTake, onFind }: DepthPanelProps) {
   const numbers = useNumbers();
   const unit = unitForReading(depth.unit);
+  // The least depth the engine looks at: a check that passes there doesn't depend on the depth.
+  const smallest = depth.unit === 'mm' ? 1 : 1 / 16;
   const inStock = (least: number | null) =>
     least === null
       ? undefined
@@ -84,10 +86,10 @@ export function DepthPanel({ depth, breadth, stock, next, readOnly, onTake, onFi
                   ) : (
                     <>
                       <td className="py-1 text-right font-mono tabular-nums">
-                        {numbers.decimals(row.exact, 2)}
+                        {row.exact <= smallest ? 'any' : numbers.decimals(row.exact, 2)}
                       </td>
                       <td className="py-1 text-right font-mono tabular-nums">
-                        {row.rounded === null ? '–' : numbers.exact(row.rounded)}
+                        {row.rounded === null || row.exact <= smallest ? '–' : numbers.exact(row.rounded)}
                       </td>
                     </>
                   )}

@@ -32,7 +32,9 @@ export function useWording(edition: Edition): Wording {
         ?.list.find((option) => option.id === id)?.title;
       const duration = edition.durations.find((each) => each.id === id)?.title;
       const grade = fact === 'grade' ? edition.grades.rows.find((row) => row.id === id)?.title : undefined;
-      return own ?? (fact.includes('duration') ? duration : undefined) ?? grade ?? id;
+      const plain = (text: string | undefined) =>
+        text && /^[A-Z][a-z]/.test(text) ? text[0]?.toLowerCase() + text.slice(1) : text;
+      return plain(own) ?? (fact.includes('duration') ? duration : undefined) ?? grade ?? id;
     },
     number: (value) => numbers.digits(value, 6),
   };

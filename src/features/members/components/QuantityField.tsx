@@ -17,6 +17,8 @@ interface QuantityFieldProps {
   /** Whether the field may be left empty, and what is then taken. */
   empty?: string;
   note?: string | undefined;
+  /** What the field is called where its label alone would not tell it from another. */
+  about?: string | undefined;
   whole?: boolean;
 }
 
@@ -25,7 +27,7 @@ interface QuantityFieldProps {
  * bound is kept as typed, with the reason below it.
  */
 export function QuantityField(props: QuantityFieldProps) {
-  const { label, pointer, unit, above, least, most, empty, note, whole = false } = props;
+  const { label, pointer, unit, above, least, most, empty, note, about, whole = false } = props;
   const { member, readOnly, unread, findings, send } = useTools();
   const numbers = useNumbers();
   const [typing, setTyping] = useState<string | null>(null);
@@ -68,6 +70,7 @@ export function QuantityField(props: QuantityFieldProps) {
             placeholder={empty}
             inputMode="decimal"
             autoComplete="off"
+            aria-label={about}
             aria-invalid={error !== undefined}
             aria-describedby={describedBy}
             onChange={(event) => read(event.target.value)}

@@ -1,4 +1,5 @@
 import type { Edition } from '#shared/basis/schema/index.ts';
+import { valueAt } from '../lib/pointer.ts';
 import { inputUnit, unitsOf } from '../lib/units.ts';
 import { ChoiceField } from './ChoiceField.tsx';
 import { Group, GroupAction } from './Group.tsx';
@@ -100,8 +101,23 @@ export function SpansGroup() {
   );
 }
 
-/** The edition's own inputs of a span or support. */
-function Inputs({
+/** The edition's own inputs of a span or support: folded away until one of them is given. */
+function Inputs(props: { scope: 'span' | 'support'; edition: Edition; base: string; name?: string }) {
+  const { member } = useTools();
+  const given = valueAt(member, `${props.base}/inputs`);
+  const some = typeof given === 'object' && given !== null && Object.keys(given).length > 0;
+  if (!props.edition.inputs.some(({ scope }) => scope === props.scope)) return null;
+  return (
+    <details open={some} className="border-b border-rule">
+      <summary className="py-1 text-xs text-soft">
+        {props.name ? `More at ${props.name.toLowerCase()}` : 'More of this span'}
+      </summary>
+      <InputFields {...props} />
+    </details>
+  );
+}
+
+function InputFields({
   scope,
   edition,
   base,
@@ -118,7 +134,8 @@ function Inputs({
     .map((input) => (
       <QuantityField
         key={input.symbol}
-        label={name ? `${name}, ${input.title.toLowerCase()}` : input.title}
+        label={input.title}
+        about={name ? `${name}: ${input.title}` : undefined}
         pointer={`${base}/inputs/${input.symbol}`}
         unit={inputUnit(input, member)}
         empty={input.default === undefined ? 'none' : String(input.default)}

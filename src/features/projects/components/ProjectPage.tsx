@@ -56,6 +56,7 @@ export function ProjectPage() {
   const canAdd = may(project.data, 'members.create') && edition !== null;
   return (
     <Page
+      wide
       title={title}
       mark={
         state === 'closed' && (

@@ -1,0 +1,109 @@
+import type { ReactNode } from 'react';
+import type { MemberRow } from '#shared/contracts/projects.ts';
+import { UnverifiedMark, VerdictMark } from '#src/components/StateMark.tsx';
+import { UtilisationBar } from '#src/components/UtilisationBar.tsx';
+import type { Numbers } from '#src/lib/format/locale.ts';
+import { moment } from '#src/lib/format/time.ts';
+
+export interface MemberColumn {
+  key: string;
+  title: string;
+  width: string;
+  right?: boolean;
+  /** What it is sorted by; left out: it can't be. */
+  by?: (row: MemberRow) => string | number;
+  cell: (row: MemberRow, numbers: Numbers) => ReactNode;
+  /** Shown on a phone too. */
+  narrow?: boolean;
+}
+
+const longest = ({ spans }: MemberRow) => Math.max(...spans);
+
+/** Columns of the members table after the mark, which links to the sheet. */
+export const memberColumns: readonly MemberColumn[] = [
+  {
+    key: 'use',
+    title: 'Use',
+    width: 'minmax(6rem,1fr)',
+    by: ({ use }) => use ?? '',
+    cell: ({ use }) => use ?? '',
+  },
+  {
+    key: 'span',
+    title: 'Span',
+    width: '10rem',
+    right: true,
+    by: longest,
+    cell: (row, numbers) => (
+      <>
+        {row.spans.length > 1 ? `${row.spans.length} spans, ` : ''}
+        {numbers.decimals(longest(row), row.units === 'metric' ? 0 : 1)}{' '}
+        <span className="text-xs text-soft">{row.units === 'metric' ? 'mm' : 'in'}</span>
+      </>
+    ),
+  },
+  {
+    key: 'section',
+    title: 'Section',
+    width: '8rem',
+    right: true,
+    by: ({ section }) => section.h * 10_000 + section.b,
+    cell: ({ section }, numbers) =>
+      `${section.pieces > 1 ? `${section.pieces} of ` : ''}${numbers.exact(section.b)} × ${numbers.exact(section.h)}`,
+  },
+  { key: 'grade', title: 'Grade', width: '7rem', by: ({ grade }) => grade, cell: ({ grade }) => grade },
+  {
+    key: 'check',
+    title: 'Governing check',
+    width: 'minmax(8rem,1fr)',
+    by: ({ result }) => result?.checkTitle ?? '',
+    cell: ({ result }) => result?.checkTitle ?? result?.because ?? 'not checked',
+  },
+  {
+    key: 'bar',
+    title: 'Utilisation',
+    width: '8rem',
+    cell: ({ result }) => (
+      <UtilisationBar value={result?.utilisation ?? null} word={result?.word ?? 'none'} />
+    ),
+  },
+  {
+    key: 'value',
+    title: 'value',
+    width: '3.5rem',
+    right: true,
+    narrow: true,
+    by: ({ result }) => result?.utilisation ?? (result?.word === 'fails' ? 99 : -1),
+    cell: ({ result }, numbers) =>
+      typeof result?.utilisation === 'number' ? numbers.decimals(result.utilisation, 2) : '–',
+  },
+  {
+    key: 'word',
+    title: 'Verdict',
+    width: '6.5rem',
+    narrow: true,
+    by: ({ result }) => result?.word ?? 'none',
+    cell: ({ result }) => (
+      <>
+        <VerdictMark word={result?.word ?? 'none'} />
+        {result && result.unverified > 0 && (
+          <span className="sr-only">
+            <UnverifiedMark count={result.unverified} />
+          </span>
+        )}
+        {result && result.departures > 0 && (
+          <span className="ml-1 text-close" title={`${result.departures} departures`}>
+            ◇
+          </span>
+        )}
+      </>
+    ),
+  },
+  {
+    key: 'saved',
+    title: 'Saved',
+    width: '9rem',
+    by: ({ savedAt }) => savedAt,
+    cell: ({ savedAt }) => <span className="text-xs text-soft">{moment(savedAt)}</span>,
+  },
+];
