@@ -36,7 +36,7 @@ export function AccountMenu({ signedIn }: { signedIn: SignedIn }) {
         type="button"
         onClick={() => setOpen(true)}
         className="grid size-9 shrink-0 place-items-center rounded-full border border-ink text-xs font-semibold"
-        aria-label={`Account of ${person.name}`}
+        aria-label={`${initials(person.name)}, account of ${person.name}`}
       >
         {initials(person.name)}
       </button>

@@ -101,7 +101,7 @@ export function Cascade({ data, width, number, unit, utilisation, onOpen }: Casc
             key={bar.key}
             role="button"
             tabIndex={bar.entry < 0 ? -1 : 0}
-            aria-label={`${bar.title}: ${bar.label}. Open in the ledger.`}
+            aria-description={`${bar.title}. Opens its ledger entry.`}
             className="cursor-pointer outline-none [&:focus-visible>rect]:stroke-accent [&:focus-visible>rect]:stroke-2"
             onClick={() => bar.entry >= 0 && onOpen(bar.entry)}
             onKeyDown={(event) => {
@@ -111,7 +111,6 @@ export function Cascade({ data, width, number, unit, utilisation, onOpen }: Casc
               }
             }}
           >
-            <title>{bar.title}</title>
             <rect
               x={left}
               y={upper}
@@ -130,30 +129,32 @@ export function Cascade({ data, width, number, unit, utilisation, onOpen }: Casc
                 strokeDasharray="2 2"
               />
             )}
-            <text
-              x={left + x.bandwidth() / 2}
-              y={upper - 7}
-              textAnchor="middle"
-              className="fill-ink font-mono text-xs"
-            >
-              {bar.label}
-            </text>
-            <text
-              x={left + x.bandwidth() / 2}
-              y={height - margin.bottom + 16}
-              textAnchor="middle"
-              className="fill-ink text-xs"
-            >
-              <Symbol name={bar.symbol === '' ? 'limit' : bar.symbol} plain={bar.symbol === ''} />
-            </text>
-            <text
-              x={left + x.bandwidth() / 2}
-              y={height - margin.bottom + 30}
-              textAnchor="middle"
-              className="fill-soft text-[0.625rem]"
-            >
-              {short(bar.title, x.bandwidth())}
-            </text>
+            <g>
+              <text
+                x={left + x.bandwidth() / 2}
+                y={upper - 7}
+                textAnchor="middle"
+                className="fill-ink font-mono text-xs"
+              >
+                {bar.label}
+              </text>
+              <text
+                x={left + x.bandwidth() / 2}
+                y={height - margin.bottom + 16}
+                textAnchor="middle"
+                className="fill-ink text-xs"
+              >
+                <Symbol name={bar.symbol === '' ? 'limit' : bar.symbol} plain={bar.symbol === ''} />
+              </text>
+              <text
+                x={left + x.bandwidth() / 2}
+                y={height - margin.bottom + 30}
+                textAnchor="middle"
+                className="fill-soft text-[0.625rem]"
+              >
+                {short(bar.title, x.bandwidth())}
+              </text>
+            </g>
           </g>
         );
       })}

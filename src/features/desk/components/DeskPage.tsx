@@ -59,14 +59,14 @@ export function DeskPage() {
     },
     {
       key: 'bar',
-      title: '',
+      title: 'Utilisation',
       cell: ({ result }) => (
         <UtilisationBar value={result?.utilisation ?? null} word={result?.word ?? 'none'} />
       ),
     },
     {
       key: 'utilisation',
-      title: 'Utilisation',
+      title: 'value',
       align: 'right',
       by: ({ result }) => result?.utilisation ?? 9,
       cell: ({ result }) =>

@@ -54,7 +54,7 @@ export function TrailPage() {
                 {to && (
                   <>
                     {' '}
-                    <Link to={to} className="text-accent-ink hover:underline">
+                    <Link to={to} className="text-accent-ink underline decoration-1 underline-offset-2">
                       {entry.subject.label}
                     </Link>
                   </>
