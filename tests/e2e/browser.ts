@@ -1,6 +1,7 @@
 import { existsSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { createRequire } from 'node:module';
+import type axe from 'axe-core';
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
 import { expect } from 'vitest';
 import { seed, demoPassword } from '#server/db/seed.ts';
@@ -84,8 +85,8 @@ export async function expectAccessible(page: Page, what: string): Promise<void> 
   await cdp.send('Page.setBypassCSP', { enabled: true });
   await page.evaluate(readFileSync(axeSource, 'utf8'));
   const found = await page.evaluate(async () => {
-    const { axe } = window as typeof window & { axe: typeof import('axe-core') };
-    const result = await axe.run(document, {
+    const { axe: tool } = window as typeof window & { axe: typeof axe };
+    const result = await tool.run(document, {
       runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'],
     });
     return result.violations.map(
