@@ -50,11 +50,12 @@ export function DataTable<T>({ label, columns, rows, rowKey, minWidth = '40rem' 
                 {sortable ? (
                   <button
                     type="button"
-                    className="min-h-6 hover:text-ink"
+                    className="relative min-h-6 text-inherit hover:text-ink"
                     onClick={() => setOrder({ key, down: order?.key === key && !order.down })}
                   >
                     {title}
-                    <span aria-hidden className="ml-1 inline-block w-2">
+                    {/* Out of the flow: a column neither moves nor wraps when the arrow comes. */}
+                    <span aria-hidden className="absolute bottom-0.5 left-full ml-0.5">
                       {order?.key === key ? (order.down ? '↓' : '↑') : ''}
                     </span>
                   </button>

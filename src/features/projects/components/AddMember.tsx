@@ -50,7 +50,7 @@ export function AddMember({
   });
   return (
     <Dialog title="Add a member" open onClose={onClose}>
-      <ProblemNotice error={document.error ?? add.error} />
+      <ProblemNotice error={document.error ?? stock.error ?? add.error} />
       <form
         onSubmit={(event) => {
           event.preventDefault();
@@ -73,7 +73,7 @@ export function AddMember({
           placeholder="Floor joist, trimmer, lintel …"
         />
         <p className="mb-3 text-sm text-soft">It begins with one span and two loads that you then set.</p>
-        <Button type="submit" kind="main" disabled={!document.data || add.isPending}>
+        <Button type="submit" kind="main" disabled={!document.data || stock.isLoading || add.isPending}>
           Add it and open its sheet
         </Button>
       </form>

@@ -47,7 +47,10 @@ export function MembersTable({ project, rows }: { project: string; rows: readonl
   const sorted = inOrder(rows, order.by, order.down);
   const columns = narrow ? memberColumns.filter((column) => column.narrow) : memberColumns;
   const grid = {
-    gridTemplateColumns: ['minmax(9rem,2fr)', ...columns.map(({ width }) => width)].join(' '),
+    gridTemplateColumns: [
+      narrow ? 'minmax(9rem,1fr)' : 'minmax(13rem,3fr)',
+      ...columns.map(({ width }) => width),
+    ].join(' '),
   };
   const virtual = useVirtualizer({
     count: sorted.length,
@@ -87,7 +90,7 @@ export function MembersTable({ project, rows }: { project: string; rows: readonl
         role="table"
         aria-label="Members"
         aria-rowcount={sorted.length + 1}
-        className="text-sm sm:min-w-[68rem]"
+        className="text-sm sm:min-w-[76rem]"
       >
         <div role="rowgroup" className="sticky top-0 z-10 bg-paper">
           <div role="row" className="grid gap-x-3 border-b border-ink text-xs text-soft" style={grid}>

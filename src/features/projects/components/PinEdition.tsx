@@ -5,12 +5,13 @@ import { listBases } from '#shared/contracts/bases.ts';
 import { pinEdition, type Project } from '#shared/contracts/projects.ts';
 import { Button } from '#src/components/Button.tsx';
 import { Dialog } from '#src/components/Dialog.tsx';
+import { EditionName } from '#src/components/EditionName.tsx';
 import { EmptyState } from '#src/components/EmptyState.tsx';
 import { TextField } from '#src/components/Field.tsx';
 import { Loading } from '#src/components/Loading.tsx';
 import { ProblemNotice } from '#src/components/Notice.tsx';
 import { UnverifiedMark } from '#src/components/StateMark.tsx';
-import { call } from '#src/lib/api/call.ts';
+import { ApiProblem, call } from '#src/lib/api/call.ts';
 import { day } from '#src/lib/format/time.ts';
 
 /** Pins an edition on purpose: what each is for, what in it nobody verified, who released it. */
@@ -26,8 +27,17 @@ export function PinEdition({ project, onClose }: { project: Project; onClose: ()
       }),
     onSuccess: async () => {
       await client.invalidateQueries({ queryKey: ['project', project.id] });
-      await client.invalidateQueries({ queryKey: ['member'] });
+      await Promise.all(
+        ['projects', 'member', 'desk', 'bases', 'basis'].map((key) =>
+          client.invalidateQueries({ queryKey: [key] }),
+        ),
+      );
       onClose();
+    },
+    // A colleague changed the project: fetched anew, so that the choice is made knowing what is stored.
+    onError: async (error) => {
+      if (error instanceof ApiProblem && error.code === 'stale-version')
+        await client.invalidateQueries({ queryKey: ['project', project.id] });
     },
   });
   const editions = (bases.data?.items ?? [])
@@ -35,6 +45,11 @@ export function PinEdition({ project, onClose }: { project: Project; onClose: ()
     .filter(({ state, id }) => canBePinned(state) && id !== project.edition?.id);
   return (
     <Dialog title="Pin an edition" open onClose={onClose} wide>
+      {project.edition && (
+        <p className="mb-1">
+          Pinned now: <EditionName edition={project.edition} />
+        </p>
+      )}
       <p className="mb-3 text-soft">
         Every member is checked anew against the edition you pin. The results on the old one stay on record.
       </p>

@@ -36,7 +36,7 @@ export function ProjectPage() {
     const words = filter.toLowerCase().split(/\s+/).filter(Boolean);
     return (members.data?.items ?? []).filter((row) =>
       words.every((word) =>
-        `${row.mark} ${row.title} ${row.use ?? ''} ${row.grade} ${row.result?.word ?? ''}`
+        `${row.mark} ${row.title} ${row.use ?? ''} ${row.grade} ${row.section.b}×${row.section.h} ${row.result?.checkTitle ?? ''} ${row.result?.word ?? ''}`
           .toLowerCase()
           .includes(word),
       ),
@@ -104,7 +104,7 @@ export function ProjectPage() {
       )}
       <Section
         title="Members"
-        note={`${all.length} in all`}
+        note={filter.trim() ? `${rows.length} of ${all.length}` : `${all.length} in all`}
         actions={
           all.length > 0 && (
             <input
@@ -135,6 +135,11 @@ export function ProjectPage() {
             {edition
               ? 'Joists, beams, rafters and lintels stand here, each with its verdict.'
               : 'Pin the edition agreed for this project first; then members can be added and are checked against it.'}
+          </EmptyState>
+        ) : rows.length === 0 ? (
+          <EmptyState action={<Button onClick={() => setFilter('')}>Show all members</Button>}>
+            No member matches “{filter.trim()}”. Marks, titles, uses, grades, sections, checks and verdicts
+            are searched.
           </EmptyState>
         ) : (
           <MembersTable project={projectId} rows={rows} />

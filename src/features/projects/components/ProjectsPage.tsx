@@ -11,7 +11,7 @@ import { TextField } from '#src/components/Field.tsx';
 import { Loading } from '#src/components/Loading.tsx';
 import { ProblemNotice } from '#src/components/Notice.tsx';
 import { Page } from '#src/components/Page.tsx';
-import { verdictLook } from '#src/components/StateMark.tsx';
+import { UnverifiedMark, verdictLook } from '#src/components/StateMark.tsx';
 import { useCrumbs } from '#src/components/crumbs.ts';
 import { call } from '#src/lib/api/call.ts';
 import { may, useSignedIn } from '#src/lib/api/session.ts';
@@ -62,7 +62,17 @@ export function ProjectsPage() {
     },
     { key: 'site', title: 'Site', by: ({ site }) => site, cell: ({ site }) => site },
     { key: 'client', title: 'Client', by: ({ client }) => client, cell: ({ client }) => client },
-    { key: 'edition', title: 'Edition', cell: ({ edition }) => <EditionName edition={edition} /> },
+    {
+      key: 'edition',
+      title: 'Edition',
+      by: ({ edition }) => (edition ? `${edition.basisTitle} ${edition.number}` : ''),
+      cell: ({ edition }) => (
+        <>
+          <EditionName edition={edition} />{' '}
+          {edition && <UnverifiedMark count={edition.unverified} what="values" />}
+        </>
+      ),
+    },
     {
       key: 'counts',
       title: 'Members',
@@ -123,9 +133,16 @@ export function ProjectsPage() {
           <EmptyState>
             {wanted
               ? `No project matches “${wanted}”.`
-              : 'Projects stand here: a site, the edition agreed for it, and its members. Start with a new project.'}
+              : state === 'closed'
+                ? 'No project is closed. Closed projects stand here to be read; close one in its particulars.'
+                : 'Projects stand here: a site, the edition agreed for it, and its members. Start with a new project.'}
           </EmptyState>
         ))}
+      {data && data.total > data.items.length && (
+        <p className="mt-3 text-soft" role="status">
+          The {data.items.length} last changed of {data.total} are shown. Search to reach the others.
+        </p>
+      )}
       <NewProject open={creating} onClose={() => setCreating(false)} />
     </Page>
   );

@@ -1,5 +1,7 @@
 import type { ReactNode } from 'react';
+import { Link } from 'react-router-dom';
 import type { MemberRow } from '#shared/contracts/projects.ts';
+import type { VerdictWord } from '#shared/engine/types.ts';
 import { UnverifiedMark, VerdictMark } from '#src/components/StateMark.tsx';
 import { UtilisationBar } from '#src/components/UtilisationBar.tsx';
 import type { Numbers } from '#src/lib/format/locale.ts';
@@ -17,21 +19,26 @@ export interface MemberColumn {
   narrow?: boolean;
 }
 
+/** Worst first, as an engineer looks for them. */
+const severity: Readonly<Record<VerdictWord, number>> = { fails: 0, close: 1, none: 2, passes: 3 };
+
 const longest = ({ spans }: MemberRow) => Math.max(...spans);
+
+const departuresInWords = (count: number) => (count === 1 ? '1 departure' : `${count} departures`);
 
 /** Columns of the members table after the mark, which links to the sheet. */
 export const memberColumns: readonly MemberColumn[] = [
   {
     key: 'use',
     title: 'Use',
-    width: 'minmax(6rem,1fr)',
+    width: 'minmax(5rem,1fr)',
     by: ({ use }) => use ?? '',
     cell: ({ use }) => use ?? '',
   },
   {
     key: 'span',
     title: 'Span',
-    width: '10rem',
+    width: '9.5rem',
     right: true,
     by: longest,
     cell: (row, numbers) => (
@@ -51,18 +58,18 @@ export const memberColumns: readonly MemberColumn[] = [
     cell: ({ section }, numbers) =>
       `${section.pieces > 1 ? `${section.pieces} of ` : ''}${numbers.exact(section.b)} × ${numbers.exact(section.h)}`,
   },
-  { key: 'grade', title: 'Grade', width: '7rem', by: ({ grade }) => grade, cell: ({ grade }) => grade },
+  { key: 'grade', title: 'Grade', width: '5rem', by: ({ grade }) => grade, cell: ({ grade }) => grade },
   {
     key: 'check',
     title: 'Governing check',
-    width: 'minmax(8rem,1fr)',
+    width: 'minmax(7rem,1fr)',
     by: ({ result }) => result?.checkTitle ?? '',
     cell: ({ result }) => result?.checkTitle ?? result?.because ?? 'not checked',
   },
   {
     key: 'bar',
     title: 'Utilisation',
-    width: '8rem',
+    width: '6.5rem',
     cell: ({ result }) => (
       <UtilisationBar value={result?.utilisation ?? null} word={result?.word ?? 'none'} />
     ),
@@ -82,27 +89,44 @@ export const memberColumns: readonly MemberColumn[] = [
     title: 'Verdict',
     width: '6.5rem',
     narrow: true,
-    by: ({ result }) => result?.word ?? 'none',
+    by: ({ result }) => severity[result?.word ?? 'none'],
     cell: ({ result }) => (
       <>
         <VerdictMark word={result?.word ?? 'none'} />
-        {result && result.unverified > 0 && (
-          <span className="sr-only">
-            <UnverifiedMark count={result.unverified} />
-          </span>
-        )}
         {result && result.departures > 0 && (
-          <span className="ml-1 text-close" title={`${result.departures} departures`}>
-            ◇
+          <span className="ml-1 text-close" title={departuresInWords(result.departures)}>
+            <span aria-hidden>◇</span>
+            <span className="sr-only">{departuresInWords(result.departures)}</span>
           </span>
         )}
       </>
     ),
   },
   {
+    key: 'edition',
+    title: 'Edition',
+    width: '12rem',
+    by: ({ result }) => (result ? `${result.edition.basisTitle} ${result.edition.number}` : ''),
+    cell: ({ result }) =>
+      result ? (
+        <>
+          <Link
+            to={`/editions/${result.edition.id}`}
+            className="hover:underline"
+            title={`${result.edition.basisTitle}, edition ${result.edition.number}`}
+          >
+            <span className="sr-only">{result.edition.basisTitle}, </span>edition {result.edition.number}
+          </Link>{' '}
+          <UnverifiedMark count={result.unverified} what="values" />
+        </>
+      ) : (
+        '–'
+      ),
+  },
+  {
     key: 'saved',
     title: 'Saved',
-    width: '9rem',
+    width: '6.5rem',
     by: ({ savedAt }) => savedAt,
     cell: ({ savedAt }) => <span className="text-xs text-soft">{moment(savedAt)}</span>,
   },
