@@ -3,6 +3,7 @@ import type { Logger } from 'pino';
 import { connect } from '#server/db/connection.ts';
 import { basisRoutes } from '#server/features/bases/routes.ts';
 import { deskRoutes } from '#server/features/desk/routes.ts';
+import { draftRoutes } from '#server/features/drafts/routes.ts';
 import { firmRoutes } from '#server/features/firm/routes.ts';
 import { healthRoutes } from '#server/features/health/routes.ts';
 import { memberRoutes } from '#server/features/members/routes.ts';
@@ -52,6 +53,7 @@ const routes = [
   ...projectRoutes,
   ...memberRoutes,
   ...basisRoutes,
+  ...draftRoutes,
   ...stockRoutes,
   ...trailRoutes,
   ...firmRoutes,

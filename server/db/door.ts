@@ -99,6 +99,8 @@ function doorFor({ sequelize }: Database, transaction: Transaction, { firmId, pe
     memberships: table(models.memberships),
     bases: table(models.bases),
     editions: table(models.editions),
+    editionVersions: table(models.editionVersions),
+    editionRemarks: table(models.editionRemarks),
     stockLists: table(models.stockLists),
     sections: table(models.sections),
     projects: table(models.projects),

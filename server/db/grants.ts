@@ -5,6 +5,8 @@ const rights: Readonly<Record<string, string>> = {
   memberships: 'SELECT',
   bases: 'SELECT, INSERT, UPDATE',
   editions: 'SELECT, INSERT, UPDATE',
+  edition_versions: 'SELECT, INSERT',
+  edition_remarks: 'SELECT, INSERT',
   stock_lists: 'SELECT, INSERT, UPDATE',
   sections: 'SELECT, INSERT, UPDATE',
   projects: 'SELECT, INSERT, UPDATE',

@@ -1,7 +1,7 @@
 import { hashOf } from '#shared/basis/hash.ts';
 import { withProjectChoices } from '#shared/basis/inherit.ts';
 import { attest } from '#shared/engine/attest.ts';
-import { check, ENGINE_VERSION, resultHash, verify } from '#shared/engine/index.ts';
+import { check, ENGINE_VERSION, resultHash, runProofs, verify } from '#shared/engine/index.ts';
 import type { Edition, Finding, Member, Result } from '#shared/engine/types.ts';
 import { Plans } from './plans.ts';
 
@@ -72,6 +72,15 @@ export class Judge {
   /** Everything the compiler finds in an edition. */
   findings({ hash, document }: StoredEdition): readonly Finding[] {
     return this.#plans.of(hash, document).findings;
+  }
+
+  /** How many proofs of an edition hold, and how many don't; none can hold in one that does not compile. */
+  proofs({ hash, document }: StoredEdition): { held: number; failed: number } {
+    const { plan } = this.#plans.of(hash, document);
+    if (!plan) return { held: 0, failed: document.proofs.length };
+    const results = runProofs(plan);
+    const held = results.filter(({ holds }) => holds).length;
+    return { held, failed: results.length - held };
   }
 
   /** Whether members can be checked with an edition. */

@@ -1,7 +1,9 @@
 import { DataTypes, type Model, type ModelAttributes, type ModelStatic, type Sequelize } from 'sequelize';
 import type {
   BasisRow,
+  EditionRemarkRow,
   EditionRow,
+  EditionVersionRow,
   FirmRow,
   MemberRow,
   MembershipRow,
@@ -63,6 +65,24 @@ export function defineModels(sequelize: Sequelize) {
       submittedBy: uuid,
       releasedBy: uuid,
       releasedAt: instant,
+    }),
+    editionVersions: table<EditionVersionRow>('edition_versions', {
+      id,
+      firmId: uuid,
+      editionId: uuid,
+      version: whole,
+      undo: json,
+      changedBy: uuid,
+      changedAt: instant,
+    }),
+    editionRemarks: table<EditionRemarkRow>('edition_remarks', {
+      id,
+      firmId: uuid,
+      editionId: uuid,
+      pointer: text,
+      text,
+      remarkedBy: uuid,
+      remarkedAt: instant,
     }),
     stockLists: table<StockListRow>('stock_lists', {
       id,

@@ -1,3 +1,4 @@
+import type { Operation } from 'fast-json-patch';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Model } from 'sequelize';
 import type { MemberState, ProjectState, Role } from '#shared/access/index.ts';
 import type { EditionState } from '#shared/basis/lifecycle.ts';
@@ -55,6 +56,27 @@ export interface EditionRow extends Row<EditionRow> {
   submittedBy: Given<string | null>;
   releasedBy: Given<string | null>;
   releasedAt: Given<Date | null>;
+}
+
+/** A save of a draft: the way back to the version before it. */
+export interface EditionVersionRow extends Row<EditionVersionRow> {
+  id: Given<string>;
+  firmId: Given<string>;
+  editionId: string;
+  version: number;
+  undo: Operation[];
+  changedBy: string;
+  changedAt: Given<Date>;
+}
+
+export interface EditionRemarkRow extends Row<EditionRemarkRow> {
+  id: Given<string>;
+  firmId: Given<string>;
+  editionId: string;
+  pointer: string;
+  text: string;
+  remarkedBy: string;
+  remarkedAt: Given<Date>;
 }
 
 export interface StockListRow extends Row<StockListRow> {

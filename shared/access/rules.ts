@@ -25,6 +25,10 @@ export interface Rule {
 
 const live = (record: AccessRecord) => record.projectState === 'live';
 const liveMember = (record: AccessRecord) => live(record) && record.memberState === 'live';
+const inState =
+  (...states: readonly EditionState[]) =>
+  ({ editionState }: AccessRecord) =>
+    editionState !== undefined && states.includes(editionState);
 const notReader: readonly Role[] = roles.filter((role) => role !== 'reader');
 
 /**
@@ -56,6 +60,12 @@ export const rules = {
   'bases.read': { who: 'person' },
   'bases.create': { who: ['keeper'] },
   'editions.read': { who: 'person' },
+  'editions.draft': { who: ['keeper'] },
+  'editions.edit': { who: ['keeper'], when: inState('draft') },
+  'editions.submit': { who: ['keeper'], when: inState('draft') },
+  'editions.return': { who: ['principal', 'keeper', 'checker'], when: inState('in_check') },
+  'editions.release': { who: ['principal', 'keeper', 'checker'], when: inState('in_check') },
+  'editions.withdraw': { who: ['principal', 'keeper'], when: inState('released', 'superseded') },
 
   'stock.read': { who: 'person' },
 } as const satisfies Readonly<Record<string, Rule>>;

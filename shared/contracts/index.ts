@@ -2,6 +2,7 @@ export * from './bases.ts';
 export * from './common.ts';
 export * from './contract.ts';
 export * from './desk.ts';
+export * from './drafts.ts';
 export * from './firm.ts';
 export * from './health.ts';
 export * from './members.ts';

@@ -31,6 +31,8 @@ export const TrailEvent = Type.Union([
   event('member.saved', { mark: text, project: uuid, version: Type.Integer(), verdict }),
   event('member.removed', { mark: text, project: uuid, version: Type.Integer() }),
   event('basis.set-up', { title: text, starter: text }),
+  event('edition.drafted', { edition: text, reason: text }),
+  event('edition.changed', { edition: text, version: Type.Integer(), places: Type.Integer() }),
   event('edition.submitted', { edition: text, reason: text }),
   event('edition.returned', { edition: text, reason: text }),
   event('edition.released', { edition: text, hash: text }),

@@ -32,6 +32,10 @@ export function say(event: TrailEvent): string {
       return `took member ${event.detail.mark} out of the project`;
     case 'basis.set-up':
       return `set up the basis ${event.detail.title} from the starter ${event.detail.starter}`;
+    case 'edition.drafted':
+      return `drafted ${event.detail.edition}: ${event.detail.reason}`;
+    case 'edition.changed':
+      return `changed ${event.detail.places} ${event.detail.places === 1 ? 'place' : 'places'} of the draft ${event.detail.edition}, version ${event.detail.version}`;
     case 'edition.submitted':
       return `submitted ${event.detail.edition} for check`;
     case 'edition.returned':

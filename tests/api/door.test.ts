@@ -28,6 +28,19 @@ beforeAll(async () => {
     await makeMember(each);
     await makeStock(each);
   }
+  for (const each of [firm, other]) {
+    await each.as('keeper', async (door) => {
+      const [edition] = await door.editions.all({}, { limit: 1 });
+      const editionId = edition?.id ?? '';
+      await door.editionVersions.add({ editionId, version: 2, undo: [], changedBy: door.personId });
+      await door.editionRemarks.add({ editionId, pointer: '', text: 'Seen.', remarkedBy: door.personId });
+      const detail = { edition: 'Test', version: 2, places: 1 };
+      await door.record(
+        { kind: 'edition.changed', v: 1, detail },
+        { type: 'edition', id: editionId, label: 'Test' },
+      );
+    });
+  }
 });
 afterAll(async () => {
   await Promise.all([app.close(), owner.close()]);
@@ -37,6 +50,8 @@ const firmTables = [
   'firms',
   'memberships',
   'bases',
+  'edition_remarks',
+  'edition_versions',
   'editions',
   'stock_lists',
   'sections',
