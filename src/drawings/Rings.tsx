@@ -16,7 +16,7 @@ const centre = 75;
 /** Rings: a basis's editions as growth rings, the newest outside; a draft is dashed, a pinned ring in resin. */
 export function Rings({ rings, labels = true }: { rings: readonly Ring[]; labels?: boolean }) {
   const inward = [...rings].sort((a, b) => b.number - a.number);
-  const step = Math.min(15, 60 / Math.max(inward.length, 1));
+  const step = Math.min(24, 60 / Math.max(inward.length, 1));
   const words = inward.map(
     ({ number, state, note, pinned }) =>
       `edition ${number} ${state.replace('_', ' ')}${note ? `, ${note}` : ''}${pinned ? ', pinned by projects' : ''}`,
@@ -25,7 +25,7 @@ export function Rings({ rings, labels = true }: { rings: readonly Ring[]; labels
   return (
     <svg
       viewBox={`0 0 ${labels ? 340 : size} ${size}`}
-      className={labels ? 'w-full max-w-sm' : 'size-16'}
+      className={labels ? 'w-full max-w-lg' : 'size-16'}
       role="img"
       aria-label={`Editions, newest first: ${words.join('; ')}.`}
     >
@@ -50,8 +50,13 @@ export function Rings({ rings, labels = true }: { rings: readonly Ring[]; labels
                   className="fill-none stroke-pencil"
                   strokeWidth={0.7}
                 />
-                <text x={176} y={labelY} className={`text-sm ${pinned ? 'fill-accent-ink' : 'fill-ink'}`}>
+                <text
+                  x={176}
+                  y={labelY}
+                  className={`text-[0.6875rem] ${pinned ? 'fill-accent-ink' : 'fill-ink'}`}
+                >
                   <tspan className="font-mono font-semibold">{number}</tspan> {state.replace('_', ' ')} {note}
+                  {pinned && ', pinned'}
                 </text>
               </>
             )}

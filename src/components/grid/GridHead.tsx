@@ -1,3 +1,4 @@
+import { SymbolText } from '#src/components/Symbol.tsx';
 import { columnWidth } from './widths.ts';
 import type { GridColumn } from './types.ts';
 
@@ -13,13 +14,13 @@ export function GridHead({ columns }: { columns: readonly GridColumn[] }) {
             aria-colindex={index + 1}
             className={`flex flex-col justify-end border-r border-rule px-2 py-1 text-xs ${
               column.kind === 'number' ? 'items-end text-right' : 'items-start'
-            }`}
+            } ${index === 0 ? 'sm:sticky sm:left-0 sm:z-1 bg-paper' : ''}`}
             style={{ flex: `0 0 ${columnWidth(column)}rem` }}
           >
             <span className="text-ink">{column.title}</span>
             {(column.symbol ?? column.unit) && (
               <span className="font-mono text-[0.6875rem] text-soft">
-                {[column.symbol, column.unit].filter(Boolean).join(' ')}
+                {column.symbol && <SymbolText name={column.symbol} />} {column.unit}
               </span>
             )}
           </div>

@@ -23,6 +23,7 @@ const tones: Record<CellMark['tone'], { sign: string; className: string }> = {
   error: { sign: '■', className: 'text-fail' },
   warning: { sign: '▲', className: 'text-close' },
   unverified: { sign: '◆', className: 'text-close' },
+  memory: { sign: '◈', className: 'text-close' },
   changed: { sign: '●', className: 'text-accent-ink' },
 };
 
@@ -58,7 +59,7 @@ function GridRowPlain(props: GridRowViewProps) {
             onDoubleClick={() => onEdit(text.format(column, content))}
             className={`flex cursor-cell items-center gap-1 overflow-hidden border-r border-rule px-2 text-sm whitespace-nowrap select-none ${
               column.kind === 'number' ? 'justify-end font-mono tabular-nums' : ''
-            } ${selected ? 'bg-wash' : ''} ${at === active ? 'outline-2 -outline-offset-2 outline-accent' : ''} ${
+            } ${at === 0 ? 'sm:sticky sm:left-0 sm:z-1' : ''} ${selected ? 'bg-wash' : at === 0 ? 'bg-paper' : ''} ${at === active ? 'outline-2 -outline-offset-2 outline-accent' : ''} ${
               tone?.className ?? ''
             }`}
             style={{ flex: `0 0 ${columnWidth(column)}rem` }}

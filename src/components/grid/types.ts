@@ -22,7 +22,7 @@ export interface GridRow {
 
 /** A mark on a cell, said in words as well as shown. */
 export interface CellMark {
-  tone: 'error' | 'warning' | 'unverified' | 'changed';
+  tone: 'error' | 'warning' | 'unverified' | 'memory' | 'changed';
   message: string;
 }
 

@@ -35,7 +35,7 @@ export function BasisPage() {
       heads: true,
       by: ({ number }) => number,
       cell: ({ id, number }) => (
-        <Link to={`/editions/${id}`} className="hover:underline">
+        <Link to={`/editions/${id}`} className="whitespace-nowrap hover:underline">
           Edition {number}
         </Link>
       ),

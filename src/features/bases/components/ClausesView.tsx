@@ -30,6 +30,11 @@ export function ClausesView({ edition }: { edition: Edition }) {
         onChange={(event) => setSearch(event.target.value)}
         className="no-print mb-2 min-h-8 w-64 rounded border border-pencil bg-raised px-2.5"
       />
+      {wanted.length === 0 && (
+        <p className="py-2 text-soft" role="status">
+          {search ? `No clause matches “${search.trim()}”.` : 'No clause yet.'}
+        </p>
+      )}
       {kinds.map(([kind, title]) => {
         const clauses = wanted.filter((clause) => clause.kind === kind);
         return clauses.length === 0 ? null : (
@@ -51,7 +56,7 @@ function ClauseView({ clause, edition }: { clause: Clause; edition: Edition }) {
   const [open, setOpen] = useState(false);
   return (
     <details
-      className="border-b border-rule [content-visibility:auto]"
+      className="border-b border-rule [contain-intrinsic-size:auto_2.6rem] [content-visibility:auto]"
       onToggle={(event) => setOpen(event.currentTarget.open)}
     >
       <summary className="flex items-baseline gap-3 py-1.5">
@@ -77,6 +82,7 @@ function ClauseView({ clause, edition }: { clause: Clause; edition: Edition }) {
 }
 
 function CaseView({ each, index, edition }: { each: Case; index: number; edition: Edition }) {
+  const numbers = useNumbers();
   const source =
     edition.sources.find(({ id }) => id === each.provenance.source)?.title ?? each.provenance.source;
   return (
@@ -85,7 +91,7 @@ function CaseView({ each, index, edition }: { each: Case; index: number; edition
       <span>
         {each.when ? (
           <>
-            <span className="text-soft">when</span> {conditionInWords(edition, each.when)}
+            <span className="text-soft">when</span> {conditionInWords(edition, each.when, numbers.exact)}
           </>
         ) : (
           <span className="text-soft">otherwise</span>

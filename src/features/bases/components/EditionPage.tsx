@@ -1,7 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useMemo } from 'react';
-import { Link, useParams } from 'react-router-dom';
-import { compile } from '#shared/engine/index.ts';
+import { useParams } from 'react-router-dom';
 import { readEdition } from '#shared/contracts/bases.ts';
 import { Loading } from '#src/components/Loading.tsx';
 import { Notice, ProblemNotice } from '#src/components/Notice.tsx';
@@ -40,7 +38,17 @@ export function EditionPage() {
     ...(data ? [{ label: data.basisTitle, to: `/bases/${data.basisId}` }] : []),
     { label: data ? `Edition ${data.number}` : 'Edition' },
   ]);
-  const findings = useMemo(() => (data ? compile(data.document).findings : []), [data]);
+  // The page stands before the engine has arrived and read the edition through. Keyed by its hash: the same
+  // document has the same findings.
+  const findings = useQuery({
+    queryKey: ['findings', data?.id, data?.hash],
+    queryFn: async () => {
+      const { compile } = await import('#shared/engine/index.ts');
+      return data ? compile(data.document).findings : [];
+    },
+    enabled: data !== undefined,
+    staleTime: Infinity,
+  });
   if (error)
     return (
       <Page title="Edition">
@@ -66,13 +74,6 @@ export function EditionPage() {
             </p>
             {data.reason && <p className="mt-1 text-sm">{data.reason}</p>}
           </>
-        }
-        actions={
-          data.state === 'draft' && (
-            <Link to={`/bases/${data.basisId}`} className="text-sm text-accent-ink hover:underline">
-              To its basis
-            </Link>
-          )
         }
       >
         {data.state === 'withdrawn' && (
@@ -122,7 +123,7 @@ export function EditionPage() {
         </Section>
         <p className="mt-8 border-t border-pencil/60 pt-3 text-xs text-soft">{edition.caution}</p>
       </Page>
-      <FindingsView findings={findings} />
+      <FindingsView edition={edition} findings={findings.data ?? null} />
     </div>
   );
 }

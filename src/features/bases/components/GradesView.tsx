@@ -1,89 +1,44 @@
-import type { Edition, Grade } from '#shared/basis/schema/index.ts';
-import { unitForReading } from '#shared/units/format.ts';
-import { SymbolText } from '#src/components/Symbol.tsx';
+import { useCallback, useMemo, useState } from 'react';
+import type { Edition } from '#shared/basis/schema/index.ts';
+import { Grid, type CellText } from '#src/components/grid/index.ts';
 import { useNumbers } from '#src/lib/format/locale.ts';
+import { cellInWords, cellMark, gradeSheet } from '../gradeSheet.ts';
 
-const standings = {
-  seen: 'seen in the source',
-  memory: 'from memory, verify',
-  decision: 'decided by the firm',
-  invented: 'invented',
+const text: CellText = {
+  parse: () => ({ ok: false, message: 'This edition is read, not written.' }),
+  format: (_, value) => (value === null ? '' : String(value)),
 };
 
-/** The grade table: units in the header, unverified values marked, the source of each on hover and focus. */
+/** The grade table: units in the header, unverified values marked, the origin of the chosen value below. */
 export function GradesView({ edition }: { edition: Edition }) {
-  const numbers = useNumbers();
-  const { columns, rows } = edition.grades;
-  const source = (row: Grade, symbol: string) => {
-    const own = row.cells?.[symbol] ?? row.provenance;
-    const title = edition.sources.find(({ id }) => id === own.source)?.title ?? own.source;
-    return {
-      own,
-      words: `${title}${own.place ? `, ${own.place}` : ''}; ${standings[own.standing]}${own.verified ? `; verified by ${own.verified.by}` : '; unverified'}`,
-    };
-  };
+  const { decimals } = useNumbers();
+  const [active, setActive] = useState<{ row: string; column: string } | null>(null);
+  const { columns, rows } = useMemo(() => gradeSheet(edition, decimals), [edition, decimals]);
+  const mark = useCallback((row: string, column: string) => cellMark(edition, row, column), [edition]);
+  const onActive = useCallback((row: string, column: string) => setActive({ row, column }), []);
+  if (rows.length === 0) return <p className="text-soft">No grade yet.</p>;
   return (
-    <div className="max-h-[32rem] overflow-auto" tabIndex={0} role="group" aria-label="Grades, table">
-      <table className="w-full text-sm">
-        <thead className="sticky top-0 bg-paper">
-          <tr className="border-b border-ink text-xs text-soft">
-            <th scope="col" className="py-1.5 pr-4 text-left align-bottom font-normal">
-              Grade
-            </th>
-            {columns.map(({ symbol, title, unit }) => (
-              <th
-                key={symbol}
-                scope="col"
-                className="max-w-28 py-1.5 pl-4 text-right align-bottom font-normal"
-                title={title}
-              >
-                <span className="block text-ink">{title}</span>
-                <SymbolText name={symbol} /> <span className="font-mono">{unitForReading(unit)}</span>
-              </th>
-            ))}
-          </tr>
-        </thead>
-        <tbody>
-          {rows.map((row) => (
-            <tr key={row.id} className="border-b border-rule hover:bg-wash/60">
-              <th scope="row" className="py-1 pr-4 text-left font-semibold whitespace-nowrap">
-                {row.title}
-              </th>
-              {columns.map(({ symbol }) => {
-                const value = row.values[symbol];
-                const { own, words } = source(row, symbol);
-                return (
-                  <td
-                    key={symbol}
-                    className="py-1 pl-4 text-right font-mono whitespace-nowrap tabular-nums"
-                    title={value === undefined ? undefined : words}
-                  >
-                    {value === undefined ? (
-                      <span className="text-pencil">·</span>
-                    ) : typeof value === 'number' ? (
-                      numbers.exact(value)
-                    ) : (
-                      value.values.map((v) => numbers.exact(v)).join(' / ')
-                    )}
-                    {value !== undefined && !own.verified && (
-                      <span
-                        aria-hidden
-                        className={own.standing === 'memory' ? 'ml-1 text-close' : 'ml-1 text-pencil'}
-                      >
-                        ◆
-                      </span>
-                    )}
-                  </td>
-                );
-              })}
-            </tr>
-          ))}
-        </tbody>
-      </table>
-      <p className="py-2 text-xs text-soft">
-        ◆ not verified by a second person; in resin, written from memory. Values by size are set with a
-        stroke, smallest size first.
+    <>
+      <Grid
+        label="Grades"
+        columns={columns}
+        rows={rows}
+        text={text}
+        mark={mark}
+        onActive={onActive}
+        readOnly
+        visibleRows={14}
+      />
+      <p className="min-h-11 border-b border-rule py-2 text-sm" role="status">
+        {active
+          ? cellInWords(edition, active.row, active.column, decimals)
+          : 'Choose a value, with the arrow keys or a click, to read where it comes from.'}
       </p>
-    </div>
+      <p className="pt-2 text-xs text-soft">
+        <span className="text-close">◆</span> not verified by a second person.{' '}
+        <span className="text-close">◈</span> not verified, and written from memory. Values by size are set
+        with a stroke, smallest size first.
+      </p>
+    </>
   );
 }

@@ -16,13 +16,15 @@ const matches = {
   log: 'interpolated in the logarithm',
 };
 
-function axis({ match, points, edge }: Table['keys'][number]): string[] {
-  if (match !== 'band') return points.map(String);
+function axis({ match, points, edge }: Table['keys'][number], exact: (value: number) => string): string[] {
+  const said = (point: number | string | null) =>
+    typeof point === 'number' ? exact(point) : (point ?? 'any');
+  if (match !== 'band') return points.map(said);
   return points.slice(1).map((high, i) => {
     const low = points[i];
     const [left, right] = edge === 'above' ? ['≥', '<'] : ['>', '≤'];
-    if (low === null || low === undefined) return high === null ? 'any' : `${right} ${String(high)}`;
-    return high === null ? `${left} ${String(low)}` : `${String(low)} to ${String(high)}`;
+    if (low === null || low === undefined) return high === null ? 'any' : `${right} ${said(high)}`;
+    return high === null ? `${left} ${said(low)}` : `${said(low)} to ${said(high)}`;
   });
 }
 
@@ -30,7 +32,7 @@ export function TablesView({ edition }: Props) {
   const numbers = useNumbers();
   if (edition.tables.length === 0) return <p className="text-soft">None.</p>;
   return edition.tables.map((table) => {
-    const axes = table.keys.map(axis);
+    const axes = table.keys.map((key) => axis(key, numbers.exact));
     const across = axes[axes.length - 1] ?? [];
     const down = axes
       .slice(0, -1)
@@ -39,7 +41,10 @@ export function TablesView({ edition }: Props) {
         [''],
       );
     return (
-      <details key={table.id} className="border-b border-rule [content-visibility:auto]">
+      <details
+        key={table.id}
+        className="border-b border-rule [contain-intrinsic-size:auto_2.4rem] [content-visibility:auto]"
+      >
         <summary className="py-1.5">
           <span className="font-medium">{table.title}</span>{' '}
           <span className="text-sm text-soft">
@@ -91,6 +96,7 @@ export function TablesView({ edition }: Props) {
 export function ActionsView({ edition }: Props) {
   const numbers = useNumbers();
   const duration = (id: string | undefined) => edition.durations.find((each) => each.id === id)?.title ?? '';
+  const actionTitle = (id: string) => edition.actions.find((each) => each.id === id)?.title ?? id;
   return (
     <div className="space-y-5">
       <DataTable
@@ -124,7 +130,10 @@ export function ActionsView({ edition }: Props) {
             title: 'Factor on each',
             cell: ({ terms }) =>
               terms
-                .map(({ of, factor }) => `${typeof of === 'string' ? of : of.join(', ')}: ${factor}`)
+                .map(
+                  ({ of, factor }) =>
+                    `${(typeof of === 'string' ? [of] : of).map(actionTitle).join(', ')}: ${factor}`,
+                )
                 .join('; '),
           },
           {
@@ -181,6 +190,7 @@ export function ChoicesView({ edition }: Props) {
 }
 
 export function ChecksView({ edition }: Props) {
+  const numbers = useNumbers();
   return edition.checks.map((check) => (
     <div key={check.id} className="grid gap-x-4 border-b border-rule py-2 md:grid-cols-[12rem_1fr]">
       <p>
@@ -205,7 +215,7 @@ export function ChecksView({ edition }: Props) {
         )}
         {check.applies && (
           <span className="w-full text-sm text-soft">
-            only where {conditionInWords(edition, check.applies)}
+            only where {conditionInWords(edition, check.applies, numbers.exact)}
           </span>
         )}
       </p>

@@ -87,6 +87,11 @@ export function DeskPage() {
     },
   ];
   const waiting = [...data.failing, ...data.close];
+  const { failingTotal, closeTotal } = data;
+  const totals = [
+    `${failingTotal} ${failingTotal === 1 ? 'fails' : 'fail'}, ${closeTotal} ${closeTotal === 1 ? 'is' : 'are'} close, in live projects`,
+    ...(waiting.length < failingTotal + closeTotal ? [`the ${waiting.length} worst are shown`] : []),
+  ].join('; ');
   return (
     <Page
       title={`Desk of ${person.name}`}
@@ -98,10 +103,7 @@ export function DeskPage() {
         </>
       }
     >
-      <Section
-        title="Members that fail or are close"
-        note={`${data.failingTotal} fail, ${data.closeTotal} are close, in live projects`}
-      >
+      <Section title="Members that fail or are close" note={totals}>
         {waiting.length ? (
           <DataTable
             label="Members that fail or are close"
@@ -141,7 +143,10 @@ export function DeskPage() {
         {data.recent.length ? (
           <ul className="columns-1 gap-10 md:columns-2">
             {data.recent.map(({ id, mark, title, project, savedBy, savedAt }) => (
-              <li key={id} className="flex items-baseline gap-3 border-b border-rule py-1.5">
+              <li
+                key={id}
+                className="flex break-inside-avoid items-baseline gap-3 border-b border-rule py-1.5"
+              >
                 <Link
                   to={`/projects/${project.id}/members/${id}`}
                   className="font-semibold whitespace-nowrap hover:underline"

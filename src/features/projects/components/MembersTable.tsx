@@ -48,7 +48,7 @@ export function MembersTable({ project, rows }: { project: string; rows: readonl
   const columns = narrow ? memberColumns.filter((column) => column.narrow) : memberColumns;
   const grid = {
     gridTemplateColumns: [
-      narrow ? 'minmax(9rem,1fr)' : 'minmax(13rem,3fr)',
+      narrow ? 'minmax(9rem,1fr)' : 'minmax(12rem,3fr)',
       ...columns.map(({ width }) => width),
     ].join(' '),
   };
@@ -90,10 +90,10 @@ export function MembersTable({ project, rows }: { project: string; rows: readonl
         role="table"
         aria-label="Members"
         aria-rowcount={sorted.length + 1}
-        className="text-sm sm:min-w-[76rem]"
+        className="text-sm sm:min-w-[80rem]"
       >
         <div role="rowgroup" className="sticky top-0 z-10 bg-paper">
-          <div role="row" className="grid gap-x-3 border-b border-ink text-xs text-soft" style={grid}>
+          <div role="row" className="grid gap-x-2.5 border-b border-ink text-xs text-soft" style={grid}>
             {head('mark', 'Mark', markOf)}
             {columns.map(({ key, title, by, right }) => head(key, title, by, right))}
           </div>
@@ -106,10 +106,10 @@ export function MembersTable({ project, rows }: { project: string; rows: readonl
                 key={row.id}
                 role="row"
                 aria-rowindex={item.index + 2}
-                className="absolute inset-x-0 grid items-center gap-x-3 border-b border-rule hover:bg-wash/60"
+                className="absolute inset-x-0 grid items-center gap-x-2.5 border-b border-rule hover:bg-wash/60"
                 style={{ ...grid, top: `${item.start}px`, height: `${rowHeight}px` }}
               >
-                <div role="rowheader" className="truncate font-semibold">
+                <div role="rowheader" className="truncate font-semibold sm:sticky sm:left-0 sm:bg-paper">
                   <Link to={`/projects/${project}/members/${row.id}`} className="hover:underline">
                     {row.mark} <span className="font-normal text-soft">{row.title}</span>
                   </Link>

@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
 import type { MemberRow } from '#shared/contracts/projects.ts';
 import type { VerdictWord } from '#shared/engine/types.ts';
-import { UnverifiedMark, VerdictMark } from '#src/components/StateMark.tsx';
+import { VerdictMark } from '#src/components/StateMark.tsx';
 import { UtilisationBar } from '#src/components/UtilisationBar.tsx';
 import type { Numbers } from '#src/lib/format/locale.ts';
 import { moment } from '#src/lib/format/time.ts';
@@ -31,14 +31,14 @@ export const memberColumns: readonly MemberColumn[] = [
   {
     key: 'use',
     title: 'Use',
-    width: 'minmax(5rem,1fr)',
+    width: 'minmax(4.5rem,1fr)',
     by: ({ use }) => use ?? '',
     cell: ({ use }) => use ?? '',
   },
   {
     key: 'span',
     title: 'Span',
-    width: '9.5rem',
+    width: '9rem',
     right: true,
     by: longest,
     cell: (row, numbers) => (
@@ -52,24 +52,24 @@ export const memberColumns: readonly MemberColumn[] = [
   {
     key: 'section',
     title: 'Section',
-    width: '8rem',
+    width: '7rem',
     right: true,
     by: ({ section }) => section.h * 10_000 + section.b,
     cell: ({ section }, numbers) =>
       `${section.pieces > 1 ? `${section.pieces} of ` : ''}${numbers.exact(section.b)} × ${numbers.exact(section.h)}`,
   },
-  { key: 'grade', title: 'Grade', width: '5rem', by: ({ grade }) => grade, cell: ({ grade }) => grade },
+  { key: 'grade', title: 'Grade', width: '4rem', by: ({ grade }) => grade, cell: ({ grade }) => grade },
   {
     key: 'check',
     title: 'Governing check',
-    width: 'minmax(7rem,1fr)',
+    width: 'minmax(7.5rem,1fr)',
     by: ({ result }) => result?.checkTitle ?? '',
     cell: ({ result }) => result?.checkTitle ?? result?.because ?? 'not checked',
   },
   {
     key: 'bar',
     title: 'Utilisation',
-    width: '6.5rem',
+    width: '5.5rem',
     cell: ({ result }) => (
       <UtilisationBar value={result?.utilisation ?? null} word={result?.word ?? 'none'} />
     ),
@@ -77,7 +77,7 @@ export const memberColumns: readonly MemberColumn[] = [
   {
     key: 'value',
     title: 'value',
-    width: '3.5rem',
+    width: '3rem',
     right: true,
     narrow: true,
     by: ({ result }) => result?.utilisation ?? (result?.word === 'fails' ? 99 : -1),
@@ -87,7 +87,7 @@ export const memberColumns: readonly MemberColumn[] = [
   {
     key: 'word',
     title: 'Verdict',
-    width: '6.5rem',
+    width: '5.75rem',
     narrow: true,
     by: ({ result }) => severity[result?.word ?? 'none'],
     cell: ({ result }) => (
@@ -105,20 +105,35 @@ export const memberColumns: readonly MemberColumn[] = [
   {
     key: 'edition',
     title: 'Edition',
-    width: '12rem',
-    by: ({ result }) => (result ? `${result.edition.basisTitle} ${result.edition.number}` : ''),
+    width: '3.5rem',
+    right: true,
+    by: ({ result }) => result?.edition.number ?? 0,
     cell: ({ result }) =>
       result ? (
-        <>
-          <Link
-            to={`/editions/${result.edition.id}`}
-            className="hover:underline"
-            title={`${result.edition.basisTitle}, edition ${result.edition.number}`}
-          >
-            <span className="sr-only">{result.edition.basisTitle}, </span>edition {result.edition.number}
-          </Link>{' '}
-          <UnverifiedMark count={result.unverified} what="values" />
-        </>
+        <Link
+          to={`/editions/${result.edition.id}`}
+          className="hover:underline"
+          title={`${result.edition.basisTitle}, edition ${result.edition.number}`}
+        >
+          <span className="sr-only">{result.edition.basisTitle}, edition </span>
+          {result.edition.number}
+        </Link>
+      ) : (
+        '–'
+      ),
+  },
+  {
+    key: 'unverified',
+    title: 'Unverified',
+    width: '4.5rem',
+    right: true,
+    by: ({ result }) => result?.unverified ?? 0,
+    cell: ({ result }) =>
+      result && result.unverified > 0 ? (
+        <span className="text-close">
+          <span aria-hidden>◆</span> {result.unverified}
+          <span className="sr-only"> values behind this unverified</span>
+        </span>
       ) : (
         '–'
       ),

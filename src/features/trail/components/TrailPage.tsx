@@ -43,13 +43,13 @@ export function TrailPage() {
           return (
             <li
               key={entry.id}
-              className="grid grid-cols-[4rem_9rem_1fr] items-baseline gap-3 border-b border-rule py-1.5 max-md:grid-cols-1 max-md:gap-0"
+              className="grid grid-cols-[3rem_9rem_1fr] items-baseline gap-x-3 border-b border-rule py-1.5 max-md:grid-cols-[3rem_1fr]"
             >
               <span className="font-mono text-xs text-soft">{entry.id}</span>
               <time dateTime={entry.at} className="text-soft">
                 {moment(entry.at)}
               </time>
-              <span>
+              <span className="max-md:col-span-2">
                 <strong className="font-semibold">{entry.person.name}</strong> {say(entry.event)}
                 {to && (
                   <>
