@@ -48,7 +48,13 @@ export function TablesView({ edition }: Props) {
         <summary className="py-1.5">
           <span className="font-medium">{table.title}</span>{' '}
           <span className="text-sm text-soft">
-            by {table.keys.map(({ title, match }) => `${title.toLowerCase()} (${matches[match]})`).join(', ')}
+            by{' '}
+            {table.keys
+              .map(({ title, match, unit }) => {
+                const how = [unitForReading(unit), matches[match]].filter(Boolean).join(', ');
+                return `${title.toLowerCase()} (${how})`;
+              })
+              .join(', ')}
             ; {unitForReading(table.unit) || 'pure numbers'}
           </span>
         </summary>
@@ -57,8 +63,7 @@ export function TablesView({ edition }: Props) {
             <thead>
               <tr className="border-b border-ink text-xs text-soft">
                 <th scope="col" className="py-1 pr-4 text-left font-normal">
-                  {table.keys
-                    .slice(0, -1)
+                  {(table.keys.length > 1 ? table.keys.slice(0, -1) : table.keys)
                     .map(({ title }) => title)
                     .join(', ')}
                 </th>
@@ -73,7 +78,7 @@ export function TablesView({ edition }: Props) {
               {down.map((label, row) => (
                 <tr key={label} className="border-b border-rule">
                   <th scope="row" className="py-1 pr-4 text-left font-normal">
-                    {label}
+                    {label || 'Value'}
                   </th>
                   {across.map((name, column) => {
                     const value = table.values[row * across.length + column];
@@ -189,6 +194,14 @@ export function ChoicesView({ edition }: Props) {
   );
 }
 
+const checkedAt: Readonly<Record<Edition['checks'][number]['at'], string>> = {
+  member: 'once',
+  moment: 'at each place of bending',
+  shear: 'at each place of shear',
+  support: 'at each support',
+  deflection: 'in each span',
+};
+
 export function ChecksView({ edition }: Props) {
   const numbers = useNumbers();
   return edition.checks.map((check) => (
@@ -196,7 +209,8 @@ export function ChecksView({ edition }: Props) {
       <p>
         <span className="font-semibold">{check.title}</span>{' '}
         <span className="block text-sm text-soft">
-          {check.reference}; {check.at === 'member' ? 'once' : `at each ${check.at}, ${check.state ?? ''}`}
+          {check.reference}; {checkedAt[check.at]}
+          {check.state && `, for ${check.state}`}
         </span>
       </p>
       <p className="flex flex-wrap items-baseline gap-x-3">

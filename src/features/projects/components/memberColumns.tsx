@@ -31,19 +31,19 @@ export const memberColumns: readonly MemberColumn[] = [
   {
     key: 'use',
     title: 'Use',
-    width: 'minmax(4.5rem,1fr)',
+    width: 'minmax(6.5rem,1fr)',
     by: ({ use }) => use ?? '',
     cell: ({ use }) => use ?? '',
   },
   {
     key: 'span',
     title: 'Span',
-    width: '9rem',
+    width: '8rem',
     right: true,
     by: longest,
     cell: (row, numbers) => (
       <>
-        {row.spans.length > 1 ? `${row.spans.length} spans, ` : ''}
+        {row.spans.length > 1 && <span className="font-sans text-soft">{row.spans.length} spans, </span>}
         {numbers.decimals(longest(row), row.units === 'metric' ? 0 : 1)}{' '}
         <span className="text-xs text-soft">{row.units === 'metric' ? 'mm' : 'in'}</span>
       </>
