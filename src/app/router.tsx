@@ -23,6 +23,7 @@ export const router = createBrowserRouter([
       page('/bases', () => import('#src/routes/bases.tsx')),
       page('/bases/:basisId', () => import('#src/routes/basis.tsx')),
       page('/editions/:editionId', () => import('#src/routes/edition.tsx')),
+      page('/editions/:editionId/draft', () => import('#src/routes/draft.tsx')),
       page('/stock', () => import('#src/routes/stock.tsx')),
       page('/stock/:stockId', () => import('#src/routes/stock-list.tsx')),
       page('/trail', () => import('#src/routes/trail.tsx')),

@@ -22,7 +22,7 @@ export async function presentBases(door: Door, person: Person, id: string | null
   return bases.map((basis) => ({
     ...basis,
     editions: editions.filter(({ basisId }) => basisId === basis.id),
-    abilities: abilities(person, ['bases.read']),
+    abilities: abilities(person, ['bases.read', 'editions.draft']),
   }));
 }
 

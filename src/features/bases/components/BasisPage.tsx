@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
+import type { ReactNode } from 'react';
 import { Link, useParams } from 'react-router-dom';
-import { readBasis, type EditionSummary } from '#shared/contracts/bases.ts';
+import { readBasis, type Basis, type EditionSummary } from '#shared/contracts/bases.ts';
 import { DataTable, type DataColumn } from '#src/components/DataTable.tsx';
 import { Loading } from '#src/components/Loading.tsx';
 import { ProblemNotice } from '#src/components/Notice.tsx';
@@ -13,8 +14,8 @@ import { call } from '#src/lib/api/call.ts';
 import { day } from '#src/lib/format/time.ts';
 import { ringsOf } from '../ringsOf.ts';
 
-/** A basis: its rings, and what each edition changed. */
-export function BasisPage() {
+/** A basis: its rings, and what each edition changed. `actions`: what can be done with it, put in by the route. */
+export function BasisPage({ actions }: { actions: (basis: Basis) => ReactNode }) {
   const { basisId = '' } = useParams();
   const { data, error } = useQuery({
     queryKey: ['basis', basisId],
@@ -66,7 +67,7 @@ export function BasisPage() {
     },
   ];
   return (
-    <Page title={data.title} lead={data.purpose}>
+    <Page title={data.title} lead={data.purpose} actions={actions(data)}>
       <Rings rings={ringsOf(data)} />
       <Section title="Editions" note="newest first">
         <DataTable

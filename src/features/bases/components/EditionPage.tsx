@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useParams } from 'react-router-dom';
+import { Link, useParams } from 'react-router-dom';
 import { readEdition } from '#shared/contracts/bases.ts';
 import { Loading } from '#src/components/Loading.tsx';
 import { Notice, ProblemNotice } from '#src/components/Notice.tsx';
@@ -61,6 +61,16 @@ export function EditionPage() {
     <div className="xl:grid xl:grid-cols-[minmax(0,1fr)_20rem]">
       <Page
         title={`${data.basisTitle}, edition ${data.number}`}
+        actions={
+          (data.state === 'draft' || data.state === 'in_check') && (
+            <Link
+              to={`/editions/${data.id}/draft`}
+              className="inline-flex min-h-8 items-center rounded border border-ink bg-ink px-3 text-sm font-medium text-on-ink hover:bg-ink/90"
+            >
+              {data.state === 'draft' ? 'Work on the draft' : 'Check and release'}
+            </Link>
+          )
+        }
         mark={<EditionMark state={data.state} />}
         lead={
           <>

@@ -47,15 +47,22 @@ export function useDraft(draft: Draft, readOnly: boolean) {
   const [history, setHistory] = useState<History<Edition>>(() =>
     begin(readOnly ? draft.document : withKept(draft)),
   );
-  const [saving, setSaving] = useState<DraftSaving>({ kind: 'saved' });
+  const [saving, setSaving] = useState<DraftSaving>(() => ({
+    kind: history.now === draft.document ? 'saved' : 'waiting',
+  }));
   const saved = useRef({ version: draft.version, document: draft.document });
   const sending = useRef(false);
+  const latest = useRef(history.now);
   const { now } = history;
 
   const save = useCallback(async (): Promise<void> => {
     const base = saved.current;
     const patch = patchBetween(base.document, now);
-    if (patch.length === 0 || sending.current) return;
+    if (sending.current) return;
+    if (patch.length === 0) {
+      setSaving({ kind: 'saved' });
+      return;
+    }
     sending.current = true;
     setSaving({ kind: 'saving' });
     try {
@@ -72,6 +79,8 @@ export function useDraft(draft: Draft, readOnly: boolean) {
           return { ...current, now: since.ok ? since.document : (answer.document as Edition) };
         });
       }
+      // What is kept here is only what the server hasn't got.
+      keep(id, patchBetween(document, latest.current === now ? document : latest.current));
       setSaving({ kind: 'saved' });
       void client.invalidateQueries({ queryKey: ['edition', id] });
     } catch (error) {
@@ -85,10 +94,11 @@ export function useDraft(draft: Draft, readOnly: boolean) {
 
   const blocked = saving.kind === 'clash';
   useEffect(() => {
+    latest.current = now;
     if (readOnly) return undefined;
     const patch = patchBetween(saved.current.document, now);
     keep(id, patch);
-    if (patch.length === 0 || blocked) return undefined;
+    if (blocked) return undefined;
     const timer = setTimeout(() => void save(), rest);
     return () => clearTimeout(timer);
   }, [blocked, id, now, readOnly, save]);
@@ -100,18 +110,24 @@ export function useDraft(draft: Draft, readOnly: boolean) {
     setSaving({ kind: 'waiting' });
   };
 
+  const typed = (step: (current: History<Edition>) => History<Edition>) => {
+    setHistory(step);
+    setSaving((current) => (current.kind === 'clash' ? current : { kind: 'waiting' }));
+  };
+  const unsaved = () => patchBetween(saved.current.document, now).length > 0;
   return {
     edition: now,
     saving,
-    change: (next: Edition) => setHistory((current) => stepTo(current, next)),
-    undo: () => setHistory(undone),
-    redo: () => setHistory(redone),
+    change: (next: Edition) => typed((current) => stepTo(current, next)),
+    undo: () => typed(undone),
+    redo: () => typed(redone),
     canUndo: history.past.length > 0,
     canRedo: history.future.length > 0,
-    retry: () => void save(),
+    /** Saves at once; for those who can't wait for the keyboard to rest. */
+    flush: save,
     settle,
     /** Version the server has; moves are made on it. */
     version: () => saved.current.version,
-    unsaved: () => patchBetween(saved.current.document, now).length > 0,
+    unsaved,
   };
 }

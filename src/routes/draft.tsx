@@ -1,0 +1,1 @@
+export { DraftPage as default } from '#src/features/drafts/components/DraftPage.tsx';
