@@ -36,6 +36,7 @@ describe('a basis keeper drafts and a second person releases', () => {
     await page.getByRole('button', { name: 'Set it up' }).click();
     await page.getByRole('table', { name: 'Editions' }).getByRole('link', { name: 'Edition 1' }).click();
     await page.getByRole('link', { name: 'Work on the draft' }).click();
+    await page.waitForURL(/\/draft$/);
     const grid = page.getByRole('grid', { name: 'Grades' });
     await grid.waitFor();
     const draft = page.url();
@@ -142,6 +143,7 @@ describe('a basis keeper drafts and a second person releases', () => {
     await page.getByRole('button', { name: 'Set it up' }).click();
     await page.getByRole('table', { name: 'Editions' }).getByRole('link', { name: 'Edition 1' }).click();
     await page.getByRole('link', { name: 'Work on the draft' }).click();
+    await page.waitForURL(/\/draft$/);
     await page.getByRole('grid', { name: 'Grades' }).waitFor();
     for (const tab of ['Grades', 'Clauses', 'Tables', 'Differences']) {
       await page.getByRole('tab', { name: tab }).click();
