@@ -40,7 +40,7 @@ export function MemberSheet({
   const plan = usePlan(edition);
   const { whole, result } = useVerdict(plan, sheet.document, record.project.choices);
   const sections = useMemo(() => stock.map(forEngine), [stock]);
-  const answers = useAnswers(plan, whole, sections);
+  const answers = useAnswers(edition, whole, sections);
   const [restoredSeen, setRestoredSeen] = useState(false);
   const unread = Object.keys(sheet.unread).length;
   const savable = work.changed && unread === 0 && work.saving.kind !== 'saving';

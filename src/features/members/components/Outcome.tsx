@@ -11,7 +11,7 @@ import { cascadeOf } from '#src/drawings/cascadeSteps.ts';
 import { Drivers } from '#src/drawings/Drivers.tsx';
 import { useNumbers } from '#src/lib/format/locale.ts';
 import { checkOf, entriesOf, isMain } from '../lib/ledgerView.ts';
-import type { Answers } from '../lib/useVerdict.ts';
+import type { Answers } from '../lib/answers.ts';
 import { DepthPanel } from './DepthPanel.tsx';
 import { FindSection } from './FindSection.tsx';
 import { EditionLine } from './EditionLine.tsx';
@@ -30,7 +30,7 @@ interface OutcomeProps {
   plan: Plan | null;
   whole: Member;
   result: Result | null;
-  answers: Answers;
+  answers: Answers & { of: Member | null };
   stock: readonly StockSection[];
   unread: number;
   readOnly: boolean;
@@ -55,6 +55,8 @@ export function Outcome(props: OutcomeProps) {
     if (!behind.some((each) => each.n === n)) setChosen(checkOf(result, n));
     requestAnimationFrame(() => document.getElementById(`entry-${n}`)?.scrollIntoView({ block: 'nearest' }));
   };
+  // While the worker is at it, its answers are of the member a moment ago: none of them gets into the verdict.
+  const fresh = answers.of === whole;
   const doubts = result?.findings.filter((finding) => finding.severity !== 'note') ?? [];
   return (
     <div className="min-w-0 px-4 pt-5 lg:px-8">
@@ -62,7 +64,7 @@ export function Outcome(props: OutcomeProps) {
       <VerdictBlock
         result={result}
         unread={unread}
-        depth={answers.depth}
+        depth={fresh ? answers.depth : null}
         next={answers.next}
         open={check?.id ?? null}
         onOpen={(id) => {
@@ -79,27 +81,29 @@ export function Outcome(props: OutcomeProps) {
           </ul>
         </Notice>
       )}
-      <div className={unread > 0 ? 'pt-5 opacity-50' : 'pt-5'} aria-hidden={unread > 0 ? true : undefined}>
-        {result && answers.curves && (
-          <StripPanel member={whole} edition={edition} result={result} curves={answers.curves} />
-        )}
-        {answers.depth && (
-          <DepthPanel
-            depth={answers.depth}
-            breadth={whole.section.b}
-            stock={stock}
-            next={answers.next}
-            readOnly={readOnly}
-            onFind={() => setFinding(true)}
-            onTake={({ actual, nominal, id }) =>
-              send({
-                kind: 'set',
-                pointer: '/section',
-                value: { ...actual, pieces: whole.section.pieces, nominal, stock: id },
-              })
-            }
-          />
-        )}
+      <div className={`pt-5 ${unread > 0 ? 'opacity-50' : ''}`} aria-hidden={unread > 0 ? true : undefined}>
+        <div aria-busy={!fresh}>
+          {result && answers.curves && (
+            <StripPanel member={whole} edition={edition} result={result} curves={answers.curves} />
+          )}
+          {answers.depth && (
+            <DepthPanel
+              depth={answers.depth}
+              breadth={whole.section.b}
+              stock={stock}
+              next={fresh ? answers.next : null}
+              readOnly={readOnly}
+              onFind={() => setFinding(true)}
+              onTake={({ actual, nominal, id }) =>
+                send({
+                  kind: 'set',
+                  pointer: '/section',
+                  value: { ...actual, pieces: whole.section.pieces, nominal, stock: id },
+                })
+              }
+            />
+          )}
+        </div>
         {cascade && check && (
           <Section
             title={`Cascade, ${check.title.toLowerCase()}`}
