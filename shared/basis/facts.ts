@@ -23,23 +23,49 @@ export interface BuiltInFact {
   at?: readonly PlaceKind[];
   /** For words: what it can be, where the list doesn't depend on the edition. */
   words?: readonly string[];
+  /** For numbers: what it can be; left out where anything. */
+  range?: FactRange;
 }
+
+/** Bounds of a number: more than `above`, or at least `from`; at most `to`. */
+export interface FactRange {
+  above?: number;
+  from?: number;
+  to?: number;
+  whole?: boolean;
+}
+
+const positive: FactRange = { above: 0 };
+const notNegative: FactRange = { from: 0 };
+const counted: FactRange = { from: 1, whole: true };
 
 const everywhere = ['moment', 'shear', 'support', 'deflection'] as const;
 
 export const builtInFacts: readonly BuiltInFact[] = [
   // Member
-  { symbol: 'b', title: 'Breadth, all pieces', dimension: 'length', level: 'member' },
-  { symbol: 'b_1', title: 'Breadth of one piece', dimension: 'length', level: 'member' },
-  { symbol: 'h', title: 'Depth', dimension: 'length', level: 'member' },
-  { symbol: 'b_nominal', title: 'Ordered breadth of one piece', dimension: 'length', level: 'member' },
-  { symbol: 'h_nominal', title: 'Ordered depth', dimension: 'length', level: 'member' },
-  { symbol: 'pieces', title: 'Pieces acting together', dimension: 'number', level: 'member' },
-  { symbol: 'spacing', title: 'Spacing of repeated members', dimension: 'length', level: 'member' },
-  { symbol: 'tributary', title: 'Tributary width', dimension: 'length', level: 'member' },
-  { symbol: 'spans', title: 'Number of spans', dimension: 'number', level: 'member' },
-  { symbol: 'L_max', title: 'Longest span', dimension: 'length', level: 'member' },
-  { symbol: 'slope', title: 'Slope', dimension: 'angle', level: 'member' },
+  { symbol: 'b', title: 'Breadth, all pieces', dimension: 'length', level: 'member', range: positive },
+  { symbol: 'b_1', title: 'Breadth of one piece', dimension: 'length', level: 'member', range: positive },
+  { symbol: 'h', title: 'Depth', dimension: 'length', level: 'member', range: positive },
+  {
+    symbol: 'b_nominal',
+    title: 'Ordered breadth of one piece',
+    dimension: 'length',
+    level: 'member',
+    range: positive,
+  },
+  { symbol: 'h_nominal', title: 'Ordered depth', dimension: 'length', level: 'member', range: positive },
+  { symbol: 'pieces', title: 'Pieces acting together', dimension: 'number', level: 'member', range: counted },
+  {
+    symbol: 'spacing',
+    title: 'Spacing of repeated members',
+    dimension: 'length',
+    level: 'member',
+    range: positive,
+  },
+  { symbol: 'tributary', title: 'Tributary width', dimension: 'length', level: 'member', range: positive },
+  { symbol: 'spans', title: 'Number of spans', dimension: 'number', level: 'member', range: counted },
+  { symbol: 'L_max', title: 'Longest span', dimension: 'length', level: 'member', range: positive },
+  { symbol: 'slope', title: 'Slope', dimension: 'angle', level: 'member', range: { from: 0, to: 75 } },
   { symbol: 'grade', title: 'Grade', dimension: 'word', level: 'member' },
   // Combination
   { symbol: 'duration', title: 'Duration of the combination', dimension: 'word', level: 'combination' },
@@ -56,8 +82,15 @@ export const builtInFacts: readonly BuiltInFact[] = [
   },
   { symbol: 'action_duration', title: 'Duration of the action', dimension: 'word', level: 'term' },
   // Place
-  { symbol: 'x', title: 'Place from the left end', dimension: 'length', level: 'place', at: everywhere },
-  { symbol: 'L', title: 'Span', dimension: 'length', level: 'place', at: everywhere },
+  {
+    symbol: 'x',
+    title: 'Place from the left end',
+    dimension: 'length',
+    level: 'place',
+    at: everywhere,
+    range: notNegative,
+  },
+  { symbol: 'L', title: 'Span', dimension: 'length', level: 'place', at: everywhere, range: positive },
   {
     symbol: 'span_kind',
     title: 'Kind of span',
@@ -74,7 +107,14 @@ export const builtInFacts: readonly BuiltInFact[] = [
     at: everywhere,
     words: ['none', 'uniform', 'point', 'mixed', 'end-moment'],
   },
-  { symbol: 'M', title: 'Bending moment', dimension: 'moment', level: 'place', at: ['moment'] },
+  {
+    symbol: 'M',
+    title: 'Bending moment',
+    dimension: 'moment',
+    level: 'place',
+    at: ['moment'],
+    range: notNegative,
+  },
   {
     symbol: 'M_variable',
     title: 'Bending moment from variable actions',
@@ -97,13 +137,21 @@ export const builtInFacts: readonly BuiltInFact[] = [
     level: 'place',
     at: ['moment'],
   },
-  { symbol: 'V', title: 'Shear force', dimension: 'force', level: 'place', at: ['shear'] },
+  {
+    symbol: 'V',
+    title: 'Shear force',
+    dimension: 'force',
+    level: 'place',
+    at: ['shear'],
+    range: notNegative,
+  },
   {
     symbol: 'V_d',
     title: 'Shear force as reduced near the support',
     dimension: 'force',
     level: 'place',
     at: ['shear'],
+    range: notNegative,
   },
   {
     symbol: 'V_variable',
@@ -120,13 +168,21 @@ export const builtInFacts: readonly BuiltInFact[] = [
     at: ['shear', 'support'],
     words: ['end', 'inner'],
   },
-  { symbol: 'l_b', title: 'Bearing length', dimension: 'length', level: 'place', at: ['shear', 'support'] },
+  {
+    symbol: 'l_b',
+    title: 'Bearing length',
+    dimension: 'length',
+    level: 'place',
+    at: ['shear', 'support'],
+    range: positive,
+  },
   {
     symbol: 'end_distance',
     title: 'Distance from the edge of the bearing to the end of the member',
     dimension: 'length',
     level: 'place',
     at: ['support'],
+    range: notNegative,
   },
   {
     symbol: 'R',
@@ -134,8 +190,16 @@ export const builtInFacts: readonly BuiltInFact[] = [
     dimension: 'force',
     level: 'place',
     at: ['support'],
+    range: notNegative,
   },
-  { symbol: 'R_up', title: 'Uplift', dimension: 'force', level: 'place', at: ['support'] },
+  {
+    symbol: 'R_up',
+    title: 'Uplift',
+    dimension: 'force',
+    level: 'place',
+    at: ['support'],
+    range: notNegative,
+  },
   {
     symbol: 'R_variable',
     title: 'Reaction from variable actions',
@@ -143,5 +207,12 @@ export const builtInFacts: readonly BuiltInFact[] = [
     level: 'place',
     at: ['support'],
   },
-  { symbol: 'w', title: 'Deflection', dimension: 'length', level: 'place', at: ['deflection'] },
+  {
+    symbol: 'w',
+    title: 'Deflection',
+    dimension: 'length',
+    level: 'place',
+    at: ['deflection'],
+    range: notNegative,
+  },
 ];

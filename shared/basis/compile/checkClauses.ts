@@ -1,5 +1,5 @@
-import { sameDimension } from '#shared/units/units.ts';
-import type { Clause } from '../schema/index.ts';
+import { coherentFactor, sameDimension, unitOf, type UnitSystem } from '#shared/units/units.ts';
+import type { Clause, TableKey } from '../schema/index.ts';
 import { checkCondition } from './conditions.ts';
 import { dimensionProblem } from './dimensions.ts';
 import type { Findings } from './findings.ts';
@@ -27,7 +27,23 @@ export function unknownSymbols(
   }
 }
 
+function checkKeyFormula(
+  clause: Clause,
+  { formula }: ReadKey & { kind: 'formula' },
+  axis: TableKey,
+  pointer: string,
+  symbols: Symbols,
+  findings: Findings,
+  where: Where,
+): void {
+  const unit = unitOf(axis.unit);
+  if (clause.empirical || !unit || !formula.symbols.every((s) => symbols.get(s)?.dimension)) return;
+  const problem = dimensionProblem(formula.ast, unit.dimension, symbols);
+  if (problem) findings.error('wrong-dimension', pointer, `“${axis.title}”: ${problem}`, where);
+}
+
 function checkKeyArgument(
+  clause: Clause,
   key: ReadKey,
   index: number,
   gives: ReadOutcome & { kind: 'table' },
@@ -56,6 +72,7 @@ function checkKeyArgument(
   if (key.kind === 'formula') {
     unknownSymbols(key.formula.symbols, `${at}/formula`, symbols, findings, where);
     if (wantsWord) findings.error('key-type', at, `“${axis.title}” needs a word, not a formula.`, where);
+    else checkKeyFormula(clause, key, axis, `${at}/formula`, symbols, findings, where);
     return;
   }
   const info = symbols.get(key.symbol);
@@ -68,6 +85,10 @@ function checkKeyArgument(
     );
     return;
   }
+  if (!wantsWord && info.dimension && !sameUnit(axis.unit, info.unit)) {
+    const message = `“${axis.title}” is in ${axis.unit}, and ${key.symbol} is known in ${info.unit}.`;
+    findings.error('wrong-dimension', `${at}/fact`, message, where);
+  }
   if (wantsWord !== (info.dimension === undefined)) {
     const message = `“${axis.title}” needs a ${wantsWord ? 'word' : 'number'}, and ${key.symbol} is a ${wantsWord ? 'number' : 'word'}.`;
     findings.error('key-type', `${at}/fact`, message, where);
@@ -78,6 +99,39 @@ function checkKeyArgument(
       findings.warning('table-option-missing', at, message, where);
     }
   }
+}
+
+/** What a table holds has to be what the clause gives, in the same unit: look-ups are not converted. */
+function checkTableFits(
+  clause: Clause,
+  gives: ReadOutcome & { kind: 'table' },
+  pointer: string,
+  symbols: Symbols,
+  findings: Findings,
+  where: Where,
+): void {
+  const { table } = gives.table;
+  if (clause.kind === 'class') {
+    const strange = table.values.find((value) => value !== null && !clause.words?.includes(String(value)));
+    if (clause.words && strange !== undefined) {
+      const message = `“${table.title}” gives “${String(strange)}”, which is not among the words of “${clause.title}”.`;
+      findings.error('unknown-word', `${pointer}/table`, message, where);
+    }
+  } else if (!sameUnit(table.unit, symbols.get(clause.symbol)?.unit ?? clause.unit)) {
+    const message = `“${table.title}” is in ${table.unit}, and “${clause.title}” in ${clause.unit}.`;
+    findings.error('wrong-dimension', `${pointer}/table`, message, where);
+  }
+}
+
+/** Whether a number means the same in both units. */
+function sameUnit(a: string, b: string): boolean {
+  const [one, other] = [unitOf(a), unitOf(b)];
+  if (!one || !other) return a === b;
+  const system: UnitSystem = other.system === 'both' ? 'metric' : other.system;
+  return (
+    sameDimension(one.dimension, other.dimension) &&
+    Math.abs(coherentFactor(one, system) / coherentFactor(other, system) - 1) < 1e-12
+  );
 }
 
 function checkOutcome(
@@ -127,21 +181,29 @@ function checkOutcome(
     findings.error('wrong-dimension', pointer, 'A span limit gives a length.', where);
   }
   if (gives.kind === 'table') {
+    checkTableFits(clause, gives, pointer, symbols, findings, where);
     const { keys } = gives.table.table;
     if (keys.length !== gives.keys.length) {
       const message = `“${gives.table.table.title}” has ${keys.length} keys and is given ${gives.keys.length}.`;
       findings.error('key-count', `${pointer}/keys`, message, where);
     }
-    gives.keys.forEach((key, i) => checkKeyArgument(key, i, gives, pointer, symbols, findings, where));
+    gives.keys.forEach((key, i) =>
+      checkKeyArgument(clause, key, i, gives, pointer, symbols, findings, where),
+    );
   }
 }
 
-/** Checks the cases of a clause: order, conditions, outcomes. */
+/**
+ * Checks the cases of a clause: order, conditions, outcomes.
+ *
+ * @returns Whether its cases are sound enough to be compared with each other.
+ */
 export function checkClause(
   { clause, index, cases }: ReadClause,
   symbols: Symbols,
   findings: Findings,
-): void {
+): boolean {
+  const before = findings.list.length;
   const pointer = `/clauses/${index}`;
   if (clause.kind === 'class' && !clause.words) {
     findings.warning('no-words', pointer, `“${clause.title}” should list the words it can give.`, {
@@ -175,4 +237,5 @@ export function checkClause(
       });
     }
   });
+  return !findings.list.slice(before).some(({ severity }) => severity === 'error');
 }

@@ -1,5 +1,6 @@
 import type { Edition, SizeBands } from '../schema/index.ts';
 import type { Findings } from './findings.ts';
+import type { GradeNeeds } from './gradeNeeds.ts';
 import type { SymbolInfo } from './plan.ts';
 
 const isBands = (value: number | SizeBands): value is SizeBands => typeof value === 'object';
@@ -11,7 +12,7 @@ function checkBands(
   findings: Findings,
 ): void {
   const by = symbols.get(bands.by);
-  if (!by || by.dimension === undefined || by.level === 'place' || by.level === 'term') {
+  if (!by?.dimension || by.origin === 'gradeColumn' || (by.level !== 'member' && by.level !== 'edition')) {
     findings.error(
       'bad-bands',
       `${pointer}/by`,
@@ -20,6 +21,9 @@ function checkBands(
   }
   if (bands.edges.length !== bands.values.length + 1) {
     findings.error('bad-bands', pointer, 'Size bands need one edge more than they have values.');
+  }
+  if (bands.values.some((value) => value < 0)) {
+    findings.error('negative-value', `${pointer}/values`, 'A value of the size bands is below 0.');
   }
   const numbers = bands.edges.filter((edge) => edge !== null);
   if (
@@ -60,23 +64,23 @@ function outliers(edition: Edition, findings: Findings): void {
   });
 }
 
-/** Grades without a property that checks may come to need, said once a column. */
-function missingProperties(
-  edition: Edition,
-  needed: ReadonlyMap<string, readonly string[]>,
-  findings: Findings,
-): void {
+/** Grades without a property that checks come to need for them, said once a column. */
+function missingProperties(edition: Edition, needs: GradeNeeds, findings: Findings): void {
   const { columns, rows } = edition.grades;
   columns.forEach(({ symbol, title }, index) => {
-    const checks = needed.get(symbol);
-    const without = rows.filter((row) => row.values[symbol] === undefined).map((row) => row.title);
-    if (!checks || without.length === 0) return;
+    const checks = new Set<string>();
+    const without = rows.filter((row) => {
+      if (row.values[symbol] !== undefined) return false;
+      const needing = needs.checksNeeding(row, symbol);
+      for (const check of needing) checks.add(check);
+      return needing.length > 0;
+    });
+    if (without.length === 0) return;
+    const names = without.map((row) => row.title);
     const named =
-      without.length > 4
-        ? `${without.slice(0, 3).join(', ')} and ${without.length - 3} more`
-        : without.join(', ');
-    const have = without.length === 1 ? 'has' : 'have';
-    const message = `${named} ${have} no ${title.toLowerCase()}. ${[...new Set(checks)].join(', ')} may need it; a member that does gets no verdict.`;
+      names.length > 4 ? `${names.slice(0, 3).join(', ')} and ${names.length - 3} more` : names.join(', ');
+    const have = names.length === 1 ? 'has' : 'have';
+    const message = `${named} ${have} no ${title.toLowerCase()}. ${[...checks].join(', ')} may need it; a member that does gets no verdict.`;
     findings.warning('missing-property', `/grades/columns/${index}`, message);
   });
 }
@@ -85,7 +89,7 @@ function missingProperties(
 export function checkGrades(
   edition: Edition,
   symbols: ReadonlyMap<string, SymbolInfo>,
-  needed: ReadonlyMap<string, readonly string[]>,
+  needs: GradeNeeds,
   findings: Findings,
 ): void {
   const { columns, rows } = edition.grades;
@@ -138,6 +142,6 @@ export function checkGrades(
       }
     }
   });
-  missingProperties(edition, needed, findings);
+  missingProperties(edition, needs, findings);
   outliers(edition, findings);
 }

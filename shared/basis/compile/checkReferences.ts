@@ -1,3 +1,4 @@
+import { unitOf } from '#shared/units/units.ts';
 import type { Edition } from '../schema/index.ts';
 import type { Findings } from './findings.ts';
 
@@ -122,6 +123,11 @@ export function checkReferences(edition: Edition, findings: Findings): void {
       if (!has(actions, id))
         findings.error('unknown-action', `${pointer}/needs/${j}`, `There is no action “${id}”.`);
     });
+    const roles = terms.map(({ of }) => of);
+    if (roles.includes('accompanying') && !roles.includes('leading')) {
+      const message = `“${title}” has accompanying actions and none that leads. Add a leading term, or write “variable”.`;
+      findings.warning('no-leading-term', `${pointer}/terms`, message);
+    }
     terms.forEach(({ of }, j) => {
       if (typeof of === 'string') return;
       for (const id of of) {
@@ -144,36 +150,11 @@ export function checkReferences(edition: Edition, findings: Findings): void {
       );
     }
   });
-  checkAnalysis(edition, findings);
+  combinations.forEach(({ title, state }, i) => {
+    if (!checks.some((check) => check.state === state))
+      findings.warning('unused', `/combinations/${i}`, `No check is for the state “${state}” of “${title}”.`);
+  });
   checkProofs(edition, findings);
-}
-
-function checkAnalysis({ analysis, clauses, actions }: Edition, findings: Findings): void {
-  const need = (symbol: string | undefined, pointer: string, what: string) => {
-    if (symbol !== undefined && !clauses.some((clause) => clause.symbol === symbol)) {
-      findings.error(
-        'unknown-symbol',
-        pointer,
-        `The analysis takes its ${what} from “${symbol}”, and there is no such clause.`,
-      );
-    }
-  };
-  need(analysis.bendingStiffness, '/analysis/bendingStiffness', 'bending stiffness');
-  need(analysis.shearStiffness, '/analysis/shearStiffness', 'shear stiffness');
-  if (analysis.span.rule === 'clearPlus')
-    need(analysis.span.allowance, '/analysis/span/allowance', 'allowance on the clear span');
-  if (analysis.shear.at === 'distance')
-    need(analysis.shear.distance, '/analysis/shear/distance', 'distance for shear');
-  const own = analysis.selfWeight;
-  if (!own) return;
-  need(own.line, '/analysis/selfWeight/line', 'self-weight');
-  if (!actions.some(({ id }) => id === own.action)) {
-    findings.error(
-      'unknown-action',
-      '/analysis/selfWeight/action',
-      `There is no action “${own.action}” for the self-weight.`,
-    );
-  }
 }
 
 function checkProofs({ proofs, checks, clauses, grades }: Edition, findings: Findings): void {
@@ -185,8 +166,14 @@ function checkProofs({ proofs, checks, clauses, grades }: Edition, findings: Fin
         `The proof “${title}” uses the grade “${member.grade}”, which is not there.`,
       );
     }
-    expect.forEach(({ check, of }, j) => {
+    expect.forEach(({ check, of, unit }, j) => {
       const pointer = `/proofs/${i}/expect/${j}`;
+      if (!unitOf(unit))
+        findings.error(
+          'unknown-unit',
+          `${pointer}/unit`,
+          `“${unit}” of the proof “${title}” is not a known unit.`,
+        );
       if (!checks.some(({ id }) => id === check)) {
         findings.error(
           'unknown-check',

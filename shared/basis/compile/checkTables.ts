@@ -1,4 +1,5 @@
 import type { Edition, Table, TableKey } from '../schema/index.ts';
+import { unitOf } from '#shared/units/units.ts';
 import { sizeOf } from '../table/lookUp.ts';
 import type { Findings } from './findings.ts';
 
@@ -7,6 +8,12 @@ export function checkTables(edition: Edition, findings: Findings): Table[] {
   return edition.tables.filter((table, index) => {
     const before = findings.list.length;
     const pointer = `/tables/${index}`;
+    if (table.unit !== 'word' && !unitOf(table.unit))
+      findings.error(
+        'unknown-unit',
+        `${pointer}/unit`,
+        `“${table.unit}” of “${table.title}” is not a known unit.`,
+      );
     table.keys.forEach((key, i) => checkKey(key, `${pointer}/keys/${i}`, table, findings));
     const wanted = table.keys.map(sizeOf).reduce((product, size) => product * size, 1);
     if (table.values.length !== wanted) {
@@ -38,6 +45,10 @@ function checkKey(key: TableKey, pointer: string, { title }: Table, findings: Fi
   const say = (code: string, message: string) => {
     findings.error(code, `${pointer}/points`, `“${title}”, key “${key.title}”: ${message}`);
   };
+  if (key.unit !== 'word' && !unitOf(key.unit)) {
+    const message = `“${key.unit}” of “${title}”, key “${key.title}”, is not a known unit.`;
+    findings.error('unknown-unit', `${pointer}/unit`, message);
+  }
   if (match === 'exact') {
     if (points.includes(null)) say('table-key', 'a point is empty.');
     if (new Set(points).size !== points.length) say('table-duplicate-key', 'a point stands there twice.');

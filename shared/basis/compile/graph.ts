@@ -2,9 +2,30 @@ import type { Level, PlaceKind } from '../facts.ts';
 import { levels } from '../facts.ts';
 import type { Findings } from './findings.ts';
 import type { ReadClause, SymbolInfo } from './plan.ts';
+import type { Edition } from '../schema/index.ts';
 
-/** Clauses in an order in which each only looks at earlier ones; a circle is an error that names its clauses. */
-export function ordered(clauses: readonly ReadClause[], findings: Findings): ReadClause[] {
+/** Sizes that grade values depend on, by the symbol of the column. */
+export function bandSizes({ grades }: Edition): Map<string, string[]> {
+  const found = new Map<string, string[]>();
+  for (const { values } of grades.rows) {
+    for (const [symbol, value] of Object.entries(values)) {
+      if (typeof value !== 'object') continue;
+      const known = found.get(symbol) ?? [];
+      if (!known.includes(value.by)) found.set(symbol, [...known, value.by]);
+    }
+  }
+  return found;
+}
+
+/**
+ * Clauses in an order in which each only looks at earlier ones, also through grade values that depend on a
+ * size; a circle is an error that names its clauses.
+ */
+export function ordered(
+  clauses: readonly ReadClause[],
+  bands: ReadonlyMap<string, readonly string[]>,
+  findings: Findings,
+): ReadClause[] {
   const bySymbol = new Map(clauses.map((clause) => [clause.clause.symbol, clause]));
   const done = new Set<ReadClause>();
   const order: ReadClause[] = [];
@@ -19,7 +40,7 @@ export function ordered(clauses: readonly ReadClause[], findings: Findings): Rea
       return;
     }
     path.push(clause);
-    for (const symbol of clause.looksAt) {
+    for (const symbol of clause.looksAt.flatMap((each) => [each, ...(bands.get(each) ?? [])])) {
       const other = bySymbol.get(symbol);
       if (other) visit(other);
     }

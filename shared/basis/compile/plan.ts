@@ -1,5 +1,5 @@
 import type { Dimension } from '#shared/units/units.ts';
-import type { Level, PlaceKind } from '../facts.ts';
+import type { FactRange, Level, PlaceKind } from '../facts.ts';
 import type { Ast } from '../formula/ast.ts';
 import type { Clause, Condition, Edition } from '../schema/index.ts';
 import type { PreparedTable } from '../table/lookUp.ts';
@@ -19,6 +19,8 @@ export interface SymbolInfo {
   dimension?: Dimension;
   /** What a word can be, where that is known. */
   words?: readonly string[];
+  /** What a number can be, in the unit above, where it has bounds. */
+  range?: FactRange;
   /** Widest level at which it is constant. */
   level: Level;
   /** Kinds of check where it exists, for the level `place`. */

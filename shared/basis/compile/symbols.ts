@@ -1,6 +1,7 @@
-import { coherentUnit, pure, unitOf, type Dimension } from '#shared/units/units.ts';
-import { builtInFacts, type FactDimension, type PlaceKind } from '../facts.ts';
-import type { Edition } from '../schema/index.ts';
+import { coherentFactor, coherentUnit, pure, unitOf, type Dimension } from '#shared/units/units.ts';
+import { builtInFacts, type FactDimension, type FactRange, type PlaceKind } from '../facts.ts';
+import { functions } from '../formula/ast.ts';
+import type { Edition, Input } from '../schema/index.ts';
 import type { Findings } from './findings.ts';
 import type { SymbolInfo } from './plan.ts';
 
@@ -46,6 +47,7 @@ function builtIns(edition: Edition): SymbolInfo[] {
       unit: dimension ? (coherentUnit(dimension, edition.unitSystem) ?? '1') : 'word',
       ...(dimension ? { dimension } : {}),
       ...(words ? { words } : {}),
+      ...(fact.range ? { range: fact.range } : {}),
       level: fact.level,
       ...(fact.at ? { at: fact.at } : {}),
       pointer: '',
@@ -79,6 +81,22 @@ function measured(
   return { ...info, unit: mustBeCoherent && fits ? unit : coherent, dimension: known.dimension };
 }
 
+/** Bounds of an input in the edition's coherent unit; a member beyond them is refused. */
+function rangeOf({ minimum, maximum, unit }: Input, edition: Edition): FactRange {
+  const known = unitOf(unit);
+  const factor = known ? coherentFactor(known, edition.unitSystem) : 1;
+  return {
+    ...(minimum === undefined ? {} : { from: minimum * factor }),
+    ...(maximum === undefined ? {} : { to: maximum * factor }),
+  };
+}
+
+/** Names that a formula reads as something else. */
+const reserved = new Set([
+  ...Object.keys(functions),
+  ...'and or not xor mod to in true false null undefined NaN Infinity'.split(' '),
+]);
+
 const everywhere: readonly PlaceKind[] = ['moment', 'shear', 'support', 'deflection'];
 
 /** The table of all symbols; two declarations of one symbol are an error. Clause levels are filled in later. */
@@ -86,6 +104,10 @@ export function collectSymbols(edition: Edition, findings: Findings): Map<string
   const table = new Map<string, SymbolInfo>();
   const add = (info: SymbolInfo) => {
     const other = table.get(info.symbol);
+    if (reserved.has(info.symbol)) {
+      const message = `“${info.title}” can’t have the symbol ${info.symbol}: formulas read that as something else.`;
+      findings.error('reserved-symbol', `${info.pointer}/symbol`, message);
+    }
     if (other) {
       const whose = other.origin === 'builtIn' ? 'a fact that every member has' : `“${other.title}”`;
       const message = `The symbol ${info.symbol} of “${info.title}” already stands for ${whose}. Choose another.`;
@@ -106,7 +128,8 @@ export function collectSymbols(edition: Edition, findings: Findings): Map<string
       pointer: `/choices/${index}`,
     });
   });
-  edition.inputs.forEach(({ symbol, title, scope, unit }, index) => {
+  edition.inputs.forEach((input, index) => {
+    const { symbol, title, scope, unit } = input;
     const pointer = `/inputs/${index}`;
     const place = scope === 'span' ? everywhere : (['shear', 'support'] as const);
     const level = scope === 'member' ? 'member' : 'place';
@@ -115,7 +138,7 @@ export function collectSymbols(edition: Edition, findings: Findings): Map<string
       measured(
         findings,
         edition,
-        { symbol, title, origin: 'input', index, level, ...at, pointer },
+        { symbol, title, origin: 'input', index, level, ...at, range: rangeOf(input, edition), pointer },
         unit,
         false,
       ),
@@ -127,7 +150,7 @@ export function collectSymbols(edition: Edition, findings: Findings): Map<string
       measured(
         findings,
         edition,
-        { symbol, title, origin: 'gradeColumn', index, level: 'member', pointer },
+        { symbol, title, origin: 'gradeColumn', index, level: 'member', range: { from: 0 }, pointer },
         unit,
         false,
       ),

@@ -4,14 +4,15 @@ import { factsOf } from './conditions.ts';
 import type { Findings } from './findings.ts';
 import type { ReadCheck, ReadClause, ReadFormula, SymbolInfo } from './plan.ts';
 
+/** Symbols in the formulas of a check. */
+export function formulasOfCheck({ demand, limit, utilisation }: ReadCheck): string[] {
+  return [demand, limit, utilisation].flatMap((formula) => formula?.symbols ?? []);
+}
+
 /** Symbols that a check looks at itself. */
 export function symbolsOfCheck(edition: Edition, read: ReadCheck): string[] {
-  const check = edition.checks[read.index];
-  const formulas = [read.demand, read.limit, read.utilisation];
-  return [
-    ...formulas.flatMap((formula) => formula?.symbols ?? []),
-    ...(check?.applies ? factsOf(check.applies) : []),
-  ];
+  const applies = edition.checks[read.index]?.applies;
+  return [...formulasOfCheck(read), ...(applies ? factsOf(applies) : [])];
 }
 
 /** Everything reachable from some symbols, through clauses. */
@@ -37,23 +38,6 @@ export function symbolsOfAnalysis({ analysis }: Edition): string[] {
     ...(span.rule === 'clearPlus' ? [span.allowance] : []),
     ...(shear.at === 'distance' ? [shear.distance] : []),
   ];
-}
-
-/** Grade columns that checks come to need, with the checks' titles. */
-export function neededColumns(
-  edition: Edition,
-  checks: readonly ReadCheck[],
-  clauses: readonly ReadClause[],
-): Map<string, string[]> {
-  const needed = new Map<string, string[]>();
-  for (const read of checks) {
-    const found = reachable(symbolsOfCheck(edition, read), clauses);
-    for (const { symbol } of edition.grades.columns) {
-      if (found.has(symbol))
-        needed.set(symbol, [...(needed.get(symbol) ?? []), edition.checks[read.index]?.title ?? '']);
-    }
-  }
-  return needed;
 }
 
 /** What stands in the edition and is used by nothing. */

@@ -1,6 +1,6 @@
 import type { Comparison, Condition } from '#shared/basis/schema/index.ts';
 import { type Env, NUMBER, PROBLEM, WORD } from '../run/env.ts';
-import { compare, type FactValue } from './compare.ts';
+import { compare, type FactValue } from '#shared/basis/condition/compare.ts';
 
 /** How a condition comes out. `UNKNOWN`: a fact that decides it has no value. */
 export const HOLDS = 1;

@@ -1,6 +1,6 @@
 import type { Condition } from '#shared/basis/schema/index.ts';
 import type { Evidence } from '../types.ts';
-import { compare, type FactValue } from './compare.ts';
+import { compare, type FactValue } from '#shared/basis/condition/compare.ts';
 
 /** Reads a fact for the record; null where it has no value. */
 export type ReadFact = (symbol: string) => FactValue | null;

@@ -1,7 +1,7 @@
 import { Engine, type RuleProperties } from 'json-rules-engine';
 import type { Condition } from '#shared/basis/schema/index.ts';
 import type { Evidence } from '../types.ts';
-import type { FactValue } from './compare.ts';
+import type { FactValue } from '#shared/basis/condition/compare.ts';
 import { factsOf } from './compileCondition.ts';
 
 /** A decision as the ledger tells it: conditions in the order they were tried, with their evidence. */

@@ -1,4 +1,4 @@
-import type { Operator } from '#shared/basis/schema/index.ts';
+import type { Operator } from '../schema/index.ts';
 
 /** A fact's value in a decision. */
 export type FactValue = number | string;
