@@ -82,7 +82,7 @@ async function main(): Promise<void> {
     // Three spans, and loads of several actions for more combinations.
     await page.getByRole('button', { name: 'Add a span' }).click();
     for (let i = 0; i < 3; i += 1) await page.getByRole('button', { name: 'Add a load' }).click();
-    const actions = page.getByLabel('Action');
+    const actions = page.getByLabel('Action', { exact: true });
     const count = await actions.count();
     for (let i = 2; i < count; i += 1) await actions.nth(i).selectOption({ index: i });
     await page.waitForTimeout(500);
