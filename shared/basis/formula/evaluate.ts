@@ -1,4 +1,4 @@
-import type { Ast, FunctionName } from './ast.ts';
+import type { Ast, FunctionName, Relation } from './ast.ts';
 
 type Binary = Extract<Ast, { kind: 'arithmetic' | 'relation' | 'and' | 'or' }>;
 
@@ -40,7 +40,10 @@ export function compileFormula(ast: Ast, slotOf: (symbol: string) => number): Ru
     }
     case 'not': {
       const of = compileFormula(ast.of, slotOf);
-      return (numbers) => (of(numbers) ? 0 : 1);
+      return (numbers) => {
+        const truth = of(numbers);
+        return truth !== truth ? NaN : truth ? 0 : 1;
+      };
     }
     case 'conditional': {
       const test = compileFormula(ast.test, slotOf);
@@ -61,8 +64,16 @@ export function compileFormula(ast: Ast, slotOf: (symbol: string) => number): Ru
 function compileBinary(ast: Binary, slotOf: (symbol: string) => number): Run {
   const left = compileFormula(ast.left, slotOf);
   const right = compileFormula(ast.right, slotOf);
-  if (ast.kind === 'and') return (n) => (left(n) && right(n) ? 1 : 0);
-  if (ast.kind === 'or') return (n) => (left(n) || right(n) ? 1 : 0);
+  if (ast.kind === 'and' || ast.kind === 'or') {
+    const settledBy = ast.kind === 'or';
+    return (n) => {
+      const truth = left(n);
+      if (truth !== truth) return NaN;
+      if (Boolean(truth) === settledBy) return settledBy ? 1 : 0;
+      const other = right(n);
+      return other !== other ? NaN : other ? 1 : 0;
+    };
+  }
   switch (ast.operator) {
     case '+':
       return (n) => left(n) + right(n);
@@ -74,18 +85,34 @@ function compileBinary(ast: Binary, slotOf: (symbol: string) => number): Run {
       return (n) => left(n) / right(n);
     case '^':
       return (n) => left(n) ** right(n);
+    default:
+      return compileRelation(ast.operator, left, right);
+  }
+}
+
+/** What is compared with something that has no value has no truth either: an error never picks a branch. */
+function compileRelation(operator: Relation, left: Run, right: Run): Run {
+  const truth = (holds: boolean, a: number, b: number) => (holds ? 1 : a === a && b === b ? 0 : NaN);
+  const made = (holds: (a: number, b: number) => boolean): Run => {
+    return (n) => {
+      const a = left(n);
+      const b = right(n);
+      return truth(holds(a, b), a, b);
+    };
+  };
+  switch (operator) {
     case '<':
-      return (n) => (left(n) < right(n) ? 1 : 0);
+      return made((a, b) => a < b);
     case '<=':
-      return (n) => (left(n) <= right(n) ? 1 : 0);
+      return made((a, b) => a <= b);
     case '>':
-      return (n) => (left(n) > right(n) ? 1 : 0);
+      return made((a, b) => a > b);
     case '>=':
-      return (n) => (left(n) >= right(n) ? 1 : 0);
+      return made((a, b) => a >= b);
     case '==':
-      return (n) => (left(n) === right(n) ? 1 : 0);
+      return made((a, b) => a === b);
     case '!=':
-      return (n) => (left(n) !== right(n) ? 1 : 0);
+      return made((a, b) => a < b || a > b);
   }
 }
 

@@ -3,6 +3,7 @@ import { all, create, type EvalFunction } from 'mathjs';
 import { describe, expect, it } from 'vitest';
 import { symbolsOf, type Ast } from './ast.ts';
 import { compileFormula } from './evaluate.ts';
+import { whyNotFinite } from './explain.ts';
 import { formulaBounds, parseFormula } from './parse.ts';
 import { printFormula } from './print.ts';
 import { flattenProduct } from './product.ts';
@@ -179,6 +180,45 @@ describe('properties of formulas', () => {
       ),
       { numRuns: 400 },
     );
+  });
+});
+
+describe('what has no value', () => {
+  it.each([
+    'sqrt(0 - x) < 3 ? 1 : 2',
+    'sqrt(0 - x) >= 3 ? 1 : 2',
+    'sqrt(0 - x) != sqrt(0 - x) ? 1 : 2',
+    'not (log(0 - x) > 1) ? 1 : 2',
+    'x > 0 and sqrt(0 - x) > 1 ? 1 : 2',
+    'sqrt(0 - x) > 1 or x > 0 ? 1 : 2',
+  ])('never picks a branch: %s', (text) => {
+    expect(value(text, { x: 4 })).toBeNaN();
+  });
+
+  it('does not matter in a branch that is not taken, nor behind a settled word', () => {
+    expect(value('x > 0 ? 1 / x : 0', { x: 0 })).toBe(0);
+    expect(value('x > 0 and sqrt(0 - 1) > 0 ? 1 : 2', { x: 0 })).toBe(2);
+    expect(value('x == 0 or sqrt(0 - 1) > 0 ? 1 : 2', { x: 0 })).toBe(1);
+  });
+
+  it.each([
+    ['b / (h - 200) + 1', 'b / (h - 200) divides by 0'],
+    ['1 + sqrt(h - 300)', 'sqrt(h - 300) takes the square root of -100'],
+    ['log(h - 200)', 'log(h - 200) takes the logarithm of 0'],
+    ['(h - 201)^0.5', '(h - 201)^0.5 takes a root of -1'],
+    ['(h - 200)^-1', '(h - 200)^(-1) divides by 0'],
+    ['h^200', 'h^200 is too large to be calculated with'],
+    ['exp(h * h)', 'exp(h * h) is too large to be calculated with'],
+    ['h > 100 ? 1 / (h - 200) : sqrt(0 - h)', '1 / (h - 200) divides by 0'],
+    ['sqrt(0 - h) > 1 ? 1 : 2', 'sqrt(0 - h) takes the square root of -200'],
+    ['min(1, 1 / (h - 200)) + sqrt(0 - b)', 'sqrt(0 - b) takes the square root of -47'],
+  ])('says why: %s', (text, reason) => {
+    const numbers: Record<string, number> = { h: 200, b: 47 };
+    expect(whyNotFinite(read(text), (symbol) => numbers[symbol] ?? NaN)).toBe(reason);
+  });
+
+  it('has nothing to say where there is a value', () => {
+    expect(whyNotFinite(read('min(1, b / 0)'), () => 47)).toBeNull();
   });
 });
 

@@ -1,3 +1,5 @@
+import { whyNotFinite } from '#shared/basis/formula/explain.ts';
+import { parseFormula } from '#shared/basis/formula/parse.ts';
 import { type Env, NUMBER, PROBLEM, type Problem } from './env.ts';
 
 /** A formula ready to run over slots. */
@@ -38,12 +40,14 @@ export function whyNot(formula: FormulaRun, env: Env, symbol: string, what: stri
       return { kind: 'failed', symbol: name, message: `${what}: ${name} is a word, and a number is needed.` };
     }
   }
-  const numbers = formula.symbols
-    .map((name, i) => `${name} = ${String(env.numbers[formula.slots[i] as number])}`)
-    .join(', ');
+  const valueOf = (name: string) =>
+    env.numbers[formula.slots[formula.symbols.indexOf(name)] as number] as number;
+  const numbers = formula.symbols.map((name) => `${name} = ${String(valueOf(name))}`).join(', ');
+  const read = parseFormula(formula.text);
+  const reason = read.ok ? whyNotFinite(read.ast, valueOf) : null;
   return {
     kind: 'failed',
     symbol,
-    message: `${what}: the formula ${formula.text} has no finite value with ${numbers || 'its numbers'}.`,
+    message: `${what}: the formula ${formula.text} has no finite value with ${numbers || 'its numbers'}${reason === null ? '' : `: ${reason}`}.`,
   };
 }
