@@ -1,3 +1,4 @@
+import { power } from '#shared/numbers/arithmetic.ts';
 import type { SpanLoads } from './spanLoads.ts';
 
 /**
@@ -34,13 +35,13 @@ export function carriedByLoads(
   };
   for (const { at, force } of points) {
     const arm = length - at;
-    add(force, force * arm, force * arm ** 2, force * arm ** 3);
+    add(force, force * arm, force * power(arm, 2), force * power(arm, 3));
   }
   for (const { at, moment: couple } of couples) {
     const arm = length - at;
     moment += couple;
     rotation -= couple * arm;
-    deflection -= (couple * arm ** 2) / 2;
+    deflection -= (couple * power(arm, 2)) / 2;
   }
   for (const { from, to, start, end } of lines) {
     // Integrals of q ηⁿ, η measured from the load's right end, then moved to the span's right end.
@@ -49,9 +50,9 @@ export function carriedByLoads(
     const rise = start - end;
     const i0 = d * (end + rise / 2);
     const i1 = d * d * (end / 2 + rise / 3);
-    const i2 = d ** 3 * (end / 3 + rise / 4);
-    const i3 = d ** 4 * (end / 4 + rise / 5);
-    add(i0, b * i0 + i1, b * b * i0 + 2 * b * i1 + i2, b ** 3 * i0 + 3 * b * b * i1 + 3 * b * i2 + i3);
+    const i2 = power(d, 3) * (end / 3 + rise / 4);
+    const i3 = power(d, 4) * (end / 4 + rise / 5);
+    add(i0, b * i0 + i1, b * b * i0 + 2 * b * i1 + i2, power(b, 3) * i0 + 3 * b * b * i1 + 3 * b * i2 + i3);
   }
   return { shear, moment, rotation, deflection };
 }

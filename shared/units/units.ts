@@ -5,6 +5,8 @@
  * 9.80665 m/s² exactly (3rd CGPM, 1901), so 1 lbf = 4.4482216152605 N exactly.
  */
 
+import { power } from '#shared/numbers/arithmetic.ts';
+
 export type UnitSystem = 'metric' | 'inch-pound';
 
 /** Powers of length and force, and of mass density, which is kept for its own sake. */
@@ -25,7 +27,7 @@ export interface UnitInfo {
 export const millimetresPerInch = 25.4;
 export const newtonsPerPoundForce = 4.4482216152605;
 /** 0.45359237 kg / (0.3048 m)³. */
-export const kilogramsPerCubicMetrePerPcf = 0.45359237 / 0.3048 ** 3;
+export const kilogramsPerCubicMetrePerPcf = 0.45359237 / power(0.3048, 3);
 
 const dim = (length: number, force: number, density = 0): Dimension => ({ length, force, density });
 export const pure: Dimension = dim(0, 0);
@@ -107,7 +109,9 @@ export function sameDimension(a: Dimension, b: Dimension): boolean {
 /** Size of a coherent unit of one system in the other's, by dimension. */
 function acrossFactor({ length, force, density }: Dimension, from: UnitSystem): number {
   const toMetric =
-    millimetresPerInch ** length * newtonsPerPoundForce ** force * kilogramsPerCubicMetrePerPcf ** density;
+    power(millimetresPerInch, length) *
+    power(newtonsPerPoundForce, force) *
+    power(kilogramsPerCubicMetrePerPcf, density);
   return from === 'inch-pound' ? toMetric : 1 / toMetric;
 }
 

@@ -1,3 +1,4 @@
+import { decimalLogarithm, exponential, naturalLogarithm, power } from '#shared/numbers/arithmetic.ts';
 import type { Ast, FunctionName, Relation } from './ast.ts';
 
 type Binary = Extract<Ast, { kind: 'arithmetic' | 'relation' | 'and' | 'or' }>;
@@ -14,9 +15,9 @@ const one: Record<Exclude<FunctionName, 'min' | 'max'>, (value: number) => numbe
   round: roundHalfAway,
   ceil: Math.ceil,
   floor: Math.floor,
-  exp: Math.exp,
-  log: Math.log,
-  log10: Math.log10,
+  exp: exponential,
+  log: naturalLogarithm,
+  log10: decimalLogarithm,
 };
 
 /**
@@ -84,7 +85,7 @@ function compileBinary(ast: Binary, slotOf: (symbol: string) => number): Run {
     case '/':
       return (n) => left(n) / right(n);
     case '^':
-      return (n) => left(n) ** right(n);
+      return (n) => power(left(n), right(n));
     default:
       return compileRelation(ast.operator, left, right);
   }

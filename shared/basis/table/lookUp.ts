@@ -1,3 +1,4 @@
+import { naturalLogarithm } from '#shared/numbers/arithmetic.ts';
 import type { Table, TableKey } from '../schema/index.ts';
 
 export type LookUpKey = number | string;
@@ -77,7 +78,7 @@ function locatePoint(axis: TableKey, key: number, outside: () => Position): Posi
   const high = points[above] as number;
   const share =
     axis.match === 'log'
-      ? (Math.log(key) - Math.log(low)) / (Math.log(high) - Math.log(low))
+      ? (naturalLogarithm(key) - naturalLogarithm(low)) / (naturalLogarithm(high) - naturalLogarithm(low))
       : (key - low) / (high - low);
   const how = axis.match === 'log' ? ' in the logarithm' : '';
   return { ok: true, index: above - 1, share, found: `${axis.title} between ${low} and ${high}${how}` };

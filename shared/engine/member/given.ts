@@ -1,3 +1,4 @@
+import { cosineOfDegrees } from '#shared/numbers/arithmetic.ts';
 import type { BeamLoad, Restraint } from '#shared/analysis/types.ts';
 import type { Choice, Edition, Grade, LoadInput, Member } from '#shared/basis/schema/index.ts';
 import type { Finding } from '../types.ts';
@@ -105,7 +106,7 @@ export function readMember(edition: Edition, member: Member): Reading {
       restraints: member.supports.map(({ restraint }) => restraint),
       bearings,
       slope,
-      cosine: slope === 0 ? 1 : Math.cos((slope * Math.PI) / 180),
+      cosine: slope === 0 ? 1 : cosineOfDegrees(slope),
       spacing: member.carries?.by === 'spacing' ? width : null,
       tributary: member.carries?.by === 'tributary' ? width : null,
       loads: loads.filter((load) => load !== null),
