@@ -140,7 +140,7 @@ class Comparing {
       const told = this.#pairs(j);
       if (told) return;
       if (this.#found.first[j] === 0) this.#unreachable(j);
-      else if (late.when && this.#found.needed[j] === false) {
+      else if (late.when && this.#found.needed[j] === false && !this.#hasTwin(j)) {
         const message = `Case “${late.id}” of “${this.#clause.title}” could be left out: the cases after it give the same.`;
         this.#say('note', 'subsumed-case', j, message);
       }
@@ -207,6 +207,16 @@ class Comparing {
       const message = `Cases ${names} look as if they could hold at once, ${claim}. Check that they can’t.`;
       this.#say('warning', 'overlap', j, message);
     } else this.#say('error', 'overlap', j, `Cases ${names} can hold at once, ${claim}.`);
+  }
+
+  /** Whether a later case holds in the same situations; that is said of the later one. */
+  #hasTwin(i: number): boolean {
+    const own = this.#holds(i);
+    return this.#clause.cases.some((late, j) => {
+      if (j <= i || !late.when) return false;
+      const other = this.#holds(j);
+      return own.size === other.size && own.common(other) === own.size;
+    });
   }
 
   #unreachable(j: number): void {
