@@ -32,7 +32,14 @@ describe('the registry of endpoints', () => {
     expect(elsewhere.map(({ contract }) => contract.name).sort()).toEqual([
       'createMember',
       'listStarters',
+      'patchDraft',
+      'readDraft',
       'readEdition',
+      'releaseEdition',
+      'returnEdition',
+      'startDraft',
+      'submitEdition',
+      'withdrawEdition',
     ]);
   });
 });
