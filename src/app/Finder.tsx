@@ -52,7 +52,7 @@ async function gather(): Promise<Found[]> {
 }
 
 /** Command finder: type, choose with the arrows, go with Enter. */
-export function Finder({ onClose }: { onClose: () => void }) {
+export default function Finder({ onClose }: { onClose: () => void }) {
   const [text, setText] = useState('');
   const [at, setAt] = useState(0);
   const navigate = useNavigate();

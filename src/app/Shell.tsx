@@ -1,4 +1,4 @@
-import { Suspense, useEffect, useState } from 'react';
+import { lazy, Suspense, useEffect, useState } from 'react';
 import { Navigate, NavLink, Outlet, ScrollRestoration, useLocation } from 'react-router-dom';
 import { Archive, ClipboardList, FolderClosed, House, Layers, Monitor, Search } from 'lucide-react';
 import { Emblem } from '#src/components/Emblem.tsx';
@@ -8,8 +8,10 @@ import { CrumbsContext, type Crumb } from '#src/components/crumbs.ts';
 import { useSession } from '#src/lib/api/session.ts';
 import { AccountMenu } from './AccountMenu.tsx';
 import { Crumbs } from './Crumbs.tsx';
-import { Finder } from './Finder.tsx';
 import { SignInAgain } from './SignInAgain.tsx';
+
+// Opened on request, and fetched then.
+const Finder = lazy(() => import('./Finder.tsx'));
 
 const places = [
   { to: '/', label: 'Desk', Icon: Monitor },
@@ -103,7 +105,11 @@ export function Shell() {
           </Suspense>
         </main>
       </div>
-      {finding && <Finder onClose={() => setFinding(false)} />}
+      {finding && (
+        <Suspense>
+          <Finder onClose={() => setFinding(false)} />
+        </Suspense>
+      )}
       <SignInAgain email={data.signedIn.person.email} />
       <ScrollRestoration />
     </CrumbsContext>

@@ -113,13 +113,7 @@ export function ReleasePanel({ draft, findings, version, flush }: ReleasePanelPr
         ))}
       </div>
       {move && (
-        <MoveDialog
-          move={move}
-          draft={draft}
-          version={version}
-          flush={flush}
-          onClose={() => setMove(null)}
-        />
+        <MoveDialog move={move} draft={draft} version={version} flush={flush} onClose={() => setMove(null)} />
       )}
     </aside>
   );

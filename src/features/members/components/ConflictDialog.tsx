@@ -18,7 +18,7 @@ const inText = (value: unknown): string =>
   value === undefined ? 'nothing' : typeof value === 'object' ? JSON.stringify(value) : String(value);
 
 /** A colleague saved first: both values of every place that differs, and a choice for each. */
-export function ConflictDialog({ base, mine, stored, onSettle, onClose }: ConflictDialogProps) {
+export default function ConflictDialog({ base, mine, stored, onSettle, onClose }: ConflictDialogProps) {
   const found = differences(base, mine, stored.document);
   const [choices, setChoices] = useState<Record<string, 'mine' | 'theirs'>>({});
   const choiceOf = (pointer: string, clash: boolean, changedByMe: boolean) =>

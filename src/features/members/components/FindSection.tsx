@@ -27,7 +27,15 @@ const ranks = [
 type Rank = (typeof ranks)[number]['id'];
 
 /** Find a section: every stock size in the chosen grades with its utilisation, and the best that pass. */
-export function FindSection({ plan, edition, member, stock, readOnly, onTake, onClose }: FindSectionProps) {
+export default function FindSection({
+  plan,
+  edition,
+  member,
+  stock,
+  readOnly,
+  onTake,
+  onClose,
+}: FindSectionProps) {
   const numbers = useNumbers();
   const [rank, setRank] = useState<Rank>('depth');
   const [grades, setGrades] = useState<readonly string[]>([member.grade]);

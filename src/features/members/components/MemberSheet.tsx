@@ -1,4 +1,4 @@
-import { useEffect, useMemo, useState } from 'react';
+import { lazy, Suspense, useEffect, useMemo, useState } from 'react';
 import type { Edition } from '#shared/basis/schema/index.ts';
 import type { EditionReference } from '#shared/contracts/common.ts';
 import type { MemberRecord } from '#shared/contracts/members.ts';
@@ -8,7 +8,6 @@ import { Notice } from '#src/components/Notice.tsx';
 import { isChanged } from '../lib/sheet.ts';
 import { useAnswers, usePlan, useVerdict } from '../lib/useVerdict.ts';
 import { useSheet } from '../api/useSheet.ts';
-import { ConflictDialog } from './ConflictDialog.tsx';
 import { DeparturesGroup, HeldGroup } from './HeldGroup.tsx';
 import { LoadsGroup } from './LoadsGroup.tsx';
 import { MadeOfGroup } from './MadeOfGroup.tsx';
@@ -16,6 +15,9 @@ import { Outcome } from './Outcome.tsx';
 import { SheetContext } from './SheetContext.ts';
 import { SheetHead } from './SheetHead.tsx';
 import { SpansGroup } from './SpansGroup.tsx';
+
+// Seldom needed, and fetched then.
+const ConflictDialog = lazy(() => import('./ConflictDialog.tsx'));
 
 interface MemberSheetProps {
   record: MemberRecord;
@@ -40,7 +42,7 @@ export function MemberSheet({
   const plan = usePlan(edition);
   const { whole, result } = useVerdict(plan, sheet.document, record.project.choices);
   const sections = useMemo(() => stock.map(forEngine), [stock]);
-  const answers = useAnswers(edition, whole, sections);
+  const answers = useAnswers(plan, whole, sections);
   const [restoredSeen, setRestoredSeen] = useState(false);
   const unread = Object.keys(sheet.unread).length;
   const savable = work.changed && unread === 0 && work.saving.kind !== 'saving';
@@ -122,13 +124,15 @@ export function MemberSheet({
         />
       </div>
       {work.saving.kind === 'conflict' && (
-        <ConflictDialog
-          base={sheet.saved.document}
-          mine={sheet.document}
-          stored={work.saving.stored}
-          onSettle={(merged) => work.saving.kind === 'conflict' && work.settle(merged, work.saving.stored)}
-          onClose={work.dismiss}
-        />
+        <Suspense>
+          <ConflictDialog
+            base={sheet.saved.document}
+            mine={sheet.document}
+            stored={work.saving.stored}
+            onSettle={(merged) => work.saving.kind === 'conflict' && work.settle(merged, work.saving.stored)}
+            onClose={work.dismiss}
+          />
+        </Suspense>
       )}
     </SheetContext>
   );

@@ -1,4 +1,4 @@
-import { useCallback, useDeferredValue, useState } from 'react';
+import { lazy, Suspense, useCallback, useDeferredValue, useState } from 'react';
 import type { Edition, Member } from '#shared/basis/schema/index.ts';
 import type { EditionReference } from '#shared/contracts/common.ts';
 import type { MemberRecord } from '#shared/contracts/members.ts';
@@ -7,11 +7,13 @@ import { Notice } from '#src/components/Notice.tsx';
 import type { Answers } from '../lib/answers.ts';
 import { EditionLine } from './EditionLine.tsx';
 import { Evidence } from './Evidence.tsx';
-import { FindSection } from './FindSection.tsx';
 import { HistoryPanel } from './HistoryPanel.tsx';
 import { Shape } from './Shape.tsx';
 import { useTools } from './SheetContext.ts';
 import { VerdictBlock } from './VerdictBlock.tsx';
+
+// Opened on request, and fetched then.
+const FindSection = lazy(() => import('./FindSection.tsx'));
 
 interface OutcomeProps {
   record: MemberRecord;
@@ -93,19 +95,21 @@ export function Outcome(props: OutcomeProps) {
         )}
       </div>
       {finding && plan && (
-        <FindSection
-          plan={plan}
-          edition={edition}
-          member={whole}
-          stock={stock}
-          readOnly={readOnly}
-          onClose={() => setFinding(false)}
-          onTake={({ actual, nominal, id }, grade) => {
-            const section = { ...actual, pieces, nominal, stock: id };
-            send({ kind: 'replace', document: { ...member, grade, section } });
-            setFinding(false);
-          }}
-        />
+        <Suspense>
+          <FindSection
+            plan={plan}
+            edition={edition}
+            member={whole}
+            stock={stock}
+            readOnly={readOnly}
+            onClose={() => setFinding(false)}
+            onTake={({ actual, nominal, id }, grade) => {
+              const section = { ...actual, pieces, nominal, stock: id };
+              send({ kind: 'replace', document: { ...member, grade, section } });
+              setFinding(false);
+            }}
+          />
+        </Suspense>
       )}
       <HistoryPanel
         member={record.id}

@@ -3,7 +3,7 @@ import { withProjectChoices } from '#shared/basis/inherit.ts';
 import type { Edition, Member } from '#shared/basis/schema/index.ts';
 import { check, compile } from '#shared/engine/index.ts';
 import type { Plan, Result, StockSection } from '#shared/engine/types.ts';
-import { noAnswers, type Answers } from './answers.ts';
+import { answersFor, noAnswers, type Answers } from './answers.ts';
 import type { Question } from './answers.worker.ts';
 
 /** A compiled edition, once for each document. */
@@ -29,47 +29,66 @@ export function useVerdict(
   return { whole, result };
 }
 
+type Sections = readonly StockSection[];
+
+/** A worker that answers one question at a time; of those that come meanwhile the newest waits. */
+function startWorker(edition: Edition, onAnswers: (answers: Answers, of: Member) => void) {
+  const thread = new Worker(new URL('./answers.worker.ts', import.meta.url), { type: 'module' });
+  const post = (question: Question) => thread.postMessage(question);
+  let number = 0;
+  let under: { number: number; member: Member } | null = null;
+  let next: { member: Member; stock: Sections } | null = null;
+  const send = (member: Member, stock: Sections) => {
+    number += 1;
+    under = { number, member };
+    post({ kind: 'member', number, member, stock });
+  };
+  thread.addEventListener('message', ({ data }: MessageEvent<{ number: number; answers: Answers }>) => {
+    if (under?.number !== data.number) return;
+    onAnswers(data.answers, under.member);
+    under = null;
+    if (next) send(next.member, next.stock);
+    next = null;
+  });
+  post({ kind: 'edition', edition });
+  return {
+    ask: (member: Member, stock: Sections) => {
+      if (under) next = { member, stock };
+      else send(member, stock);
+    },
+    stop: () => thread.terminate(),
+  };
+}
+
 /**
- * The slower answers, worked out in a worker. One question is under way at a time and the newest waits: what
- * is shown is that of the newest member for which there was time, and `of` says which.
+ * The slower answers. Those of the member as it was opened are worked out in the page, once it is painted;
+ * from the first change on a worker does it, so that a page that is only read doesn't fetch one. What is shown
+ * is of the newest member for which there was time, and `of` says which.
  */
 export function useAnswers(
-  edition: Edition,
+  plan: Plan | null,
   member: Member,
-  stock: readonly StockSection[],
+  stock: Sections,
 ): Answers & { of: Member | null } {
   const [state, setState] = useState<Answers & { of: Member | null }>({ ...noAnswers, of: null });
-  const worker = useRef<{ ask: (member: Member, stock: readonly StockSection[]) => void } | null>(null);
-  useEffect(() => {
-    const thread = new Worker(new URL('./answers.worker.ts', import.meta.url), { type: 'module' });
-    const post = (question: Question) => thread.postMessage(question);
-    let number = 0;
-    let under: { number: number; member: Member } | null = null;
-    let next: { member: Member; stock: readonly StockSection[] } | null = null;
-    const send = (asked: Member, sections: readonly StockSection[]) => {
-      number += 1;
-      under = { number, member: asked };
-      post({ kind: 'member', number, member: asked, stock: sections });
-    };
-    thread.addEventListener('message', ({ data }: MessageEvent<{ number: number; answers: Answers }>) => {
-      if (under?.number !== data.number) return;
-      setState({ ...data.answers, of: under.member });
-      under = null;
-      if (next) send(next.member, next.stock);
-      next = null;
-    });
-    post({ kind: 'edition', edition });
-    worker.current = {
-      ask: (asked, sections) => {
-        if (under) next = { member: asked, stock: sections };
-        else send(asked, sections);
-      },
-    };
-    return () => {
+  const opened = useRef(member);
+  const worker = useRef<ReturnType<typeof startWorker> | null>(null);
+  useEffect(
+    () => () => {
+      worker.current?.stop();
       worker.current = null;
-      thread.terminate();
-    };
-  }, [edition]);
-  useEffect(() => worker.current?.ask(member, stock), [edition, member, stock]);
+    },
+    [plan],
+  );
+  useEffect(() => {
+    if (!plan) return undefined;
+    if (member === opened.current && !worker.current) {
+      const timer = setTimeout(() => setState({ ...answersFor(plan, member, stock), of: member }), 30);
+      return () => clearTimeout(timer);
+    }
+    worker.current ??= startWorker(plan.edition, (answers, of) => setState({ ...answers, of }));
+    worker.current.ask(member, stock);
+    return undefined;
+  }, [plan, member, stock]);
   return state;
 }
