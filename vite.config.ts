@@ -1,11 +1,21 @@
 import tailwindcss from '@tailwindcss/vite';
 import react from '@vitejs/plugin-react';
+import type { Plugin } from 'vite';
 import { defineConfig } from 'vitest/config';
 
 const unit = ['shared/**/*.test.ts', 'server/**/*.test.ts', 'src/**/*.test.ts', 'src/**/*.test.tsx'];
 
+/** Nothing is painted before the script that knows the chosen theme has run: no flash of the other one. */
+const themeBeforePaint: Plugin = {
+  name: 'theme-before-paint',
+  transformIndexHtml: {
+    order: 'post',
+    handler: (html) => html.replaceAll('<script type="module"', '<script type="module" blocking="render"'),
+  },
+};
+
 export default defineConfig({
-  plugins: [react(), tailwindcss()],
+  plugins: [react(), tailwindcss(), themeBeforePaint],
   build: { outDir: 'dist', target: 'es2022', sourcemap: false, chunkSizeWarningLimit: 4000 },
   server: { port: 5174, proxy: { '/api': `http://127.0.0.1:${process.env['PORT'] ?? '5273'}` } },
   worker: { format: 'es' },

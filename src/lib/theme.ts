@@ -2,26 +2,21 @@
 export type ThemeChoice = 'system' | 'light' | 'dark';
 
 const key = 'ledgerbeam.theme';
-const dark = window.matchMedia('(prefers-color-scheme: dark)');
 
-function stored(): string | null {
+export function themeChoice(): ThemeChoice {
   try {
-    return localStorage.getItem(key);
+    const choice = localStorage.getItem(key);
+    return choice === 'light' || choice === 'dark' ? choice : 'system';
   } catch {
-    return null;
+    return 'system';
   }
 }
 
-export function themeChoice(): ThemeChoice {
-  const choice = stored();
-  return choice === 'light' || choice === 'dark' ? choice : 'system';
-}
-
-/** Sets the theme on the document, now and whenever the system changes. */
-export function applyTheme(): void {
-  const choice = themeChoice();
-  const effective = choice === 'system' ? (dark.matches ? 'dark' : 'light') : choice;
-  document.documentElement.dataset['theme'] = effective;
+/** Sets a choice on the document; without one the style sheet follows the system by itself. */
+export function applyTheme(choice: ThemeChoice = themeChoice()): void {
+  const { dataset } = document.documentElement;
+  if (choice === 'system') delete dataset['theme'];
+  else dataset['theme'] = choice;
 }
 
 export function chooseTheme(choice: ThemeChoice): void {
@@ -30,8 +25,5 @@ export function chooseTheme(choice: ThemeChoice): void {
   } catch {
     // Without storage the choice holds until the page is left.
   }
-  applyTheme();
-  if (choice !== 'system') document.documentElement.dataset['theme'] = choice;
+  applyTheme(choice);
 }
-
-dark.addEventListener('change', applyTheme);

@@ -1,5 +1,6 @@
 import type { Body, Contract, Output, Params, Query } from '#shared/contracts/contract.ts';
 import type { Problem } from '#shared/contracts/problem.ts';
+import { readSession, type Session } from '#shared/contracts/session.ts';
 
 /** What the server turned down, as it said it; or that it could not be reached. */
 export class ApiProblem extends Error {
@@ -24,12 +25,12 @@ const offline: Problem = {
     'The server can’t be reached. What you typed is kept on this machine; try again when the connection is back.',
 };
 
-let csrf = '';
+let held: { csrf: string; person: string | null } = { csrf: '', person: null };
 let signInAgain: (() => Promise<boolean>) | null = null;
 
-/** The token that goes with everything that changes something. */
-export function keepToken(token: string | null): void {
-  csrf = token ?? '';
+/** Keeps the token that goes with everything that changes something, and whose it is. */
+export function keepSession({ csrf, signedIn }: Session): void {
+  held = { csrf: csrf ?? '', person: signedIn?.person.id ?? null };
 }
 
 /** What to do when the session has ended in the middle of work: asks, and says whether it was renewed. */
@@ -62,7 +63,7 @@ async function send(contract: Contract, input: Input<Contract>): Promise<Respons
       credentials: 'same-origin',
       headers: {
         Accept: 'application/json',
-        ...(contract.method === 'GET' ? {} : { 'X-CSRF-Token': csrf }),
+        ...(contract.method === 'GET' ? {} : { 'X-CSRF-Token': held.csrf }),
         ...(input.body === undefined ? {} : { 'Content-Type': 'application/json' }),
       },
       ...(input.body === undefined ? {} : { body: JSON.stringify(input.body) }),
@@ -83,16 +84,35 @@ async function problemOf(response: Response): Promise<Problem> {
 }
 
 /**
+ * Whoever signs in anew in another window changes the token of this one. The new token is taken, as long as
+ * it is the same person's: nobody acts in a colleague's name without seeing it.
+ */
+async function takeNewToken(): Promise<boolean> {
+  const before = held;
+  const response = await send(readSession, {});
+  if (!response.ok) return false;
+  const session = (await response.json()) as Session;
+  if (session.csrf === before.csrf || (session.signedIn?.person.id ?? null) !== before.person) return false;
+  keepSession(session);
+  return true;
+}
+
+/**
  * Calls an endpoint. Everything that is not a success is thrown as an `ApiProblem`. When the session has
  * ended the person is asked to sign in again over the page, and the call is repeated.
  */
 export async function call<C extends Contract>(contract: C, input: Input<C> = {}): Promise<Output<C>> {
-  const response = await send(contract, input as Input<Contract>);
-  if (response.ok) return (response.status === 204 ? undefined : await response.json()) as Output<C>;
-  const problem = await problemOf(response);
-  const ended = problem.code === 'session-expired' || problem.code === 'signed-out';
-  if (ended && signInAgain && !contract.path.startsWith('/session') && (await signInAgain())) {
-    return call(contract, input);
+  let tokenTaken = false;
+  for (;;) {
+    const response = await send(contract, input as Input<Contract>);
+    if (response.ok) return (response.status === 204 ? undefined : await response.json()) as Output<C>;
+    const problem = await problemOf(response);
+    const ended = problem.code === 'session-expired' || problem.code === 'signed-out';
+    if (ended && signInAgain && !contract.path.startsWith('/session') && (await signInAgain())) continue;
+    if (problem.code === 'foreign-request' && !tokenTaken && (await takeNewToken())) {
+      tokenTaken = true;
+      continue;
+    }
+    throw new ApiProblem(problem);
   }
-  throw new ApiProblem(problem);
 }

@@ -7,19 +7,22 @@ import {
   type Session,
   type SignedIn,
 } from '#shared/contracts/session.ts';
-import { call, keepToken } from './call.ts';
+import { call, keepSession } from './call.ts';
 
 export const sessionKey = ['session'] as const;
 
 async function fetchSession(): Promise<Session> {
   const session = await call(readSession);
-  keepToken(session.csrf);
+  keepSession(session);
   return session;
 }
 
-/** Who is signed in. */
+/**
+ * Who is signed in. Asked once: that a session has ended shows at the next call, which asks for the password
+ * over the page. Asked again meanwhile, the page would be left with everything typed on it.
+ */
 export function useSession() {
-  return useQuery({ queryKey: sessionKey, queryFn: fetchSession, staleTime: 300_000 });
+  return useQuery({ queryKey: sessionKey, queryFn: fetchSession, staleTime: Infinity, gcTime: Infinity });
 }
 
 /** The person signed in; only within pages that need one. */
@@ -35,10 +38,9 @@ export const may = (record: { abilities: readonly Action[] } | undefined, action
 export function useSignIn() {
   const client = useQueryClient();
   return async (email: string, password: string): Promise<Session> => {
-    const before = await call(readSession);
-    keepToken(before.csrf);
+    await fetchSession();
     const session = await call(createSession, { body: { email, password } });
-    keepToken(session.csrf);
+    keepSession(session);
     client.setQueryData(sessionKey, session);
     return session;
   };
